@@ -1,0 +1,47 @@
+import { z } from 'zod';
+
+export const uuid = z.uuid({ error: 'This is not an identifier' });
+
+/** A calendar day, ISO 8601 `YYYY-MM-DD`; agreed dates are days and not instants. */
+export const isoDay = z.iso.date({ error: 'Give a date as year-month-day' });
+
+/** An instant in UTC, ISO 8601. */
+export const instant = z.iso.datetime();
+
+/** Counts saves of one record; a save names the revision it started from. */
+export const revision = z.int().min(1);
+
+/** One line of typed text, trimmed. */
+export const line = (maxLength: number) =>
+  z
+    .string()
+    .trim()
+    .min(1, 'Write something here')
+    .max(maxLength, `Keep this to ${maxLength} characters`)
+    .refine((text) => !/[\r\n]/.test(text), 'Keep this to one line');
+
+/** Several lines of typed text, trimmed, not empty. */
+export const prose = (maxLength: number) =>
+  z.string().trim().min(1, 'Write something here').max(maxLength, `Keep this to ${maxLength} characters`);
+
+/** Several lines that may stay empty. */
+export const optionalProse = (maxLength: number) =>
+  z.string().trim().max(maxLength, `Keep this to ${maxLength} characters`);
+
+export const emailAddress = z
+  .string()
+  .trim()
+  .toLowerCase()
+  .max(254, 'Keep this to 254 characters')
+  .pipe(z.email({ error: 'Give an e-mail address' }));
+
+export const inCommission = z.object({ commissionId: uuid });
+
+/** One page of a list; `nextCursor` is opaque and absent on the last page. */
+export const page = <T extends z.ZodType>(item: T) =>
+  z.object({ items: z.array(item), nextCursor: z.string().nullable() });
+
+export const pageQuery = z.object({
+  cursor: z.string().max(400).optional(),
+  limit: z.coerce.number().int().min(1).max(100).default(50),
+});
