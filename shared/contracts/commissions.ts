@@ -182,7 +182,7 @@ export const listParties = defineRoute({
   query: nothing,
   body: nothing,
   response: z.object({ parties: z.array(partyView), invitations: z.array(commissionInvitationView) }),
-  problems: ['not-found'],
+  problems: ['not-found', 'not-permitted'],
 });
 
 export const inviteParty = defineRoute({

@@ -231,7 +231,7 @@ export const listConsents = defineRoute({
   query: nothing,
   body: nothing,
   response: z.array(consentView),
-  problems: ['not-found'],
+  problems: ['not-found', 'not-permitted'],
 });
 
 export const answerConsent = defineRoute({

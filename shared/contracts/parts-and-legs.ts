@@ -24,7 +24,7 @@ export const listParts = defineRoute({
   query: nothing,
   body: nothing,
   response: z.array(partView),
-  problems: ['not-found'],
+  problems: ['not-found', 'not-permitted'],
 });
 
 export const createPart = defineRoute({
