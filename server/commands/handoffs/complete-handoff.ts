@@ -1,0 +1,46 @@
+import { In } from 'typeorm';
+import type { completeHandoff as contract } from '../../../shared/contracts/handoffs.ts';
+import type { ParsedInput } from '../../../shared/contracts/route.ts';
+import { weekdayDayMonth } from '../../../shared/units/calendar-day.ts';
+import { inTransaction } from '../../db/unit-of-work.ts';
+import { Commission } from '../../entities/commission.ts';
+import { HandoffOffer } from '../../entities/handoff-offer.ts';
+import { Part } from '../../entities/part.ts';
+import { Party } from '../../entities/party.ts';
+import { InputInvalid, NotInThisState } from '../../errors.ts';
+import type { RequestContext } from '../../http/context.ts';
+import { authorize } from '../../policies/authorize.ts';
+import { partyNames } from '../../queries/parties/load-party.ts';
+import { announceHandoff } from './announce-handoff.ts';
+import { guardHandoff, lockHandoff } from './handoff-days.ts';
+
+/** The receiver says the parts are there: they hold them from that day, and the handoff is done. */
+export const completeHandoff = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<string> =>
+  inTransaction(ctx, async (uow) => {
+    const { commissionId, handoffId } = params;
+    const handoff = await lockHandoff(uow.manager, commissionId, handoffId);
+    authorize(ctx.ability, 'receive', 'Handoff', handoff);
+    await guardHandoff(ctx, uow.manager, handoff, body.revision);
+    if (handoff.doneOn) throw new NotInThisState('These parts were received already.');
+    if (body.onDay > ctx.todayIso) throw new InputInvalid([{ pointer: '/body/onDay', message: 'Parts can not have arrived on a day to come' }]);
+    const parts = await uow.manager.find(Part, { where: { id: In(handoff.partIds), commissionId }, lock: { mode: 'pessimistic_write' } });
+    const elsewhere = parts.filter((part) => part.holderPartyId !== handoff.fromPartyId);
+    if (elsewhere.length > 0) {
+      const names = await partyNames(uow.manager, commissionId);
+      throw new NotInThisState(
+        `${elsewhere.map((part) => `${part.name} is with ${names.get(part.holderPartyId)}`).join('; ')}. The lead can correct the holder; nothing was changed.`,
+      );
+    }
+    for (const part of parts) Object.assign(part, { holderPartyId: handoff.toPartyId, holderSince: body.onDay, revision: part.revision + 1 });
+    await uow.manager.save(parts);
+    await uow.manager.update(HandoffOffer, { handoffId, state: 'standing' }, { state: 'withdrawn', answeredAt: ctx.now, answeredByAccountId: ctx.actor.accountId });
+    handoff.doneOn = body.onDay;
+    handoff.revision += 1;
+    await uow.manager.save(handoff);
+    const receiver = await uow.manager.findOneByOrFail(Party, { id: handoff.toPartyId });
+    if (receiver.roles.includes('client')) await uow.manager.update(Commission, { id: commissionId }, { deliveredOn: body.onDay, state: 'delivered', updatedAt: ctx.now });
+    const name = (await partyNames(uow.manager, commissionId)).get(handoff.toPartyId) ?? '';
+    announceHandoff(uow, ctx, handoff, `${name} received ${parts.map((part) => part.name).join(', ')} on ${weekdayDayMonth(body.onDay)}`, true);
+    uow.announce('parts.changed', { commissionId }, { to: 'everyone', commissionId });
+    return handoffId;
+  });
