@@ -90,9 +90,9 @@ export async function startFakeS3(): Promise<FakeS3> {
           `<InitiateMultipartUploadResult><Bucket>${BUCKET}</Bucket><Key>${key}</Key><UploadId>${uploadId}</UploadId></InitiateMultipartUploadResult>`,
         );
     }
-    const uploadId = String(req.query['uploadId']);
-    const parts = openUploads.get(uploadId);
-    if (!parts) return refuse(res, 404, 'NoSuchUpload');
+    const { uploadId } = req.query;
+    const parts = typeof uploadId === 'string' ? openUploads.get(uploadId) : undefined;
+    if (typeof uploadId !== 'string' || !parts) return refuse(res, 404, 'NoSuchUpload');
     const inOrder = [...parts].sort(([one], [other]) => one - other).map(([, bytes]) => bytes);
     const bytes = Buffer.concat(inOrder);
     objects.set(key, { bytes, mediaType: mediaTypes.get(uploadId) ?? '' });
