@@ -60,7 +60,7 @@ describe('contrast of the theme', () => {
     const raw = css.slice(0, css.indexOf('@theme')).match(/#[0-9a-f]{3,8}\b/gi) ?? [];
     expect(raw.length).toBe(tokens.size * 2);
     const checked = new Set([...SURFACES, ...WORDS, ...LINES, 'on-brass', 'on-oxide']);
-    const decoration = ['hairline', 'done-body', 'done-lit', 'work-body', 'work-lit'];
+    const decoration = ['hairline', 'veil', 'done-body', 'done-lit', 'work-body', 'work-lit'];
     expect([...tokens.keys()].filter((name) => !checked.has(name)).sort()).toEqual(decoration.sort());
   });
 

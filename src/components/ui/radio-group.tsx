@@ -1,0 +1,76 @@
+import { useId } from 'react';
+import type { ChangeEventHandler, FocusEventHandler, ReactNode, Ref } from 'react';
+
+export interface RadioOption<Value extends string> {
+  value: Value;
+  label: ReactNode;
+  hint?: ReactNode;
+  disabled?: boolean;
+}
+
+export interface RadioGroupProps<Value extends string> {
+  legend: ReactNode;
+  name: string;
+  options: readonly RadioOption<Value>[];
+  value?: Value;
+  defaultValue?: Value;
+  onValueChange?: (value: Value) => void;
+  hint?: ReactNode;
+  error?: ReactNode;
+  required?: boolean;
+  /** Set beside each other where there is room, as for two or three short words. */
+  inRow?: boolean;
+  /** For form libraries that register native inputs; given to every radio of the group. */
+  inputRef?: Ref<HTMLInputElement>;
+  onChange?: ChangeEventHandler<HTMLInputElement>;
+  onBlur?: FocusEventHandler<HTMLInputElement>;
+}
+
+/** One choice of a few, as native radios in a fieldset: arrow keys, required and form reset are the browser's own. */
+export function RadioGroup<Value extends string>(props: RadioGroupProps<Value>) {
+  const { legend, name, options, value, defaultValue, onValueChange, hint, error, required, inRow, inputRef } = props;
+  const id = useId();
+  const describedBy = [hint ? `${id}-hint` : null, error ? `${id}-error` : null].filter(Boolean).join(' ') || undefined;
+  return (
+    <fieldset aria-describedby={describedBy} aria-invalid={error ? true : undefined} className="min-w-0">
+      <legend className="text-note font-semibold">{legend}</legend>
+      {hint && (
+        <p id={`${id}-hint`} className="mt-1 text-note text-lead-grey">
+          {hint}
+        </p>
+      )}
+      <div className={inRow ? 'flex flex-wrap gap-x-6' : 'flex flex-col'}>
+        {options.map((option) => (
+          <label key={option.value} className="flex min-h-thumb items-start gap-3 py-2.5">
+            <input
+              ref={inputRef}
+              type="radio"
+              name={name}
+              value={option.value}
+              disabled={option.disabled}
+              required={required}
+              className="tick mt-px"
+              onBlur={props.onBlur}
+              onChange={(event) => {
+                props.onChange?.(event);
+                onValueChange?.(option.value);
+              }}
+              {...(value === undefined
+                ? { defaultChecked: defaultValue === option.value }
+                : { checked: value === option.value })}
+            />
+            <span className="flex flex-col leading-normal">
+              {option.label}
+              {option.hint && <span className="text-note text-lead-grey">{option.hint}</span>}
+            </span>
+          </label>
+        ))}
+      </div>
+      {error && (
+        <p id={`${id}-error`} className="text-note font-medium text-oxide">
+          {error}
+        </p>
+      )}
+    </fieldset>
+  );
+}
