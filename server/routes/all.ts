@@ -1,4 +1,21 @@
 import type { Api } from '../http/api.ts';
+import { mountBench } from './bench.ts';
+import { mountCommissions } from './commissions.ts';
+import { mountFitReports } from './fit-reports.ts';
+import { mountHandoffs } from './handoffs.ts';
+import { mountJoints } from './joints.ts';
+import { mountParties } from './parties.ts';
+import { mountPartsAndLegs } from './parts-and-legs.ts';
+import { mountStanding } from './standing.ts';
 
 /** Mounts every resource. A contract that no file here mounts fails the start-up test. */
-export function mountAll(_api: Api): void {}
+export function mountAll(api: Api): void {
+  mountCommissions(api);
+  mountParties(api);
+  mountPartsAndLegs(api);
+  mountJoints(api);
+  mountFitReports(api);
+  mountHandoffs(api);
+  mountStanding(api);
+  mountBench(api);
+}

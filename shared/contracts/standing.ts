@@ -65,7 +65,7 @@ export const getStanding = defineRoute({
   query: nothing,
   body: nothing,
   response: z.object({ todayIso: isoDay, facts: clientFactsView }),
-  problems: ['not-found'],
+  problems: ['not-found', 'not-permitted'],
 });
 
 export const benchItemView = z.object({
