@@ -1,4 +1,5 @@
-import { dayInWords, relativeInWords } from './day-words.ts';
+import { relativeDay } from '../../../shared/units/calendar-day.ts';
+import { dayInWords } from './day-words.ts';
 
 export interface RelativeDayProps {
   /** Calendar day, 'YYYY-MM-DD'. */
@@ -15,7 +16,7 @@ export function RelativeDay({ day, today, form = 'long', withoutRelative = false
   return (
     <time dateTime={day}>
       {dayInWords(day, today, form)}
-      {!withoutRelative && <span className="text-lead-grey"> ({relativeInWords(day, today)})</span>}
+      {!withoutRelative && <span className="text-lead-grey"> ({relativeDay(day, today)})</span>}
     </time>
   );
 }
