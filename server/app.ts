@@ -29,7 +29,12 @@ export function buildApp(services: Services, session: RequestHandler): BuiltApp 
   app.set('query parser', 'simple');
   app.get('/healthz', (_req, res) => void res.json({ status: 'alive' }));
   app.get('/readyz', async (_req, res) => {
-    const reachable = ready && (await db.query('SELECT 1').then(() => true, () => false));
+    const reachable =
+      ready &&
+      (await db.query('SELECT 1').then(
+        () => true,
+        () => false,
+      ));
     res.status(reachable ? 200 : 503).json({ status: reachable ? 'ready' : 'not ready' });
   });
   app.use(
@@ -47,7 +52,13 @@ export function buildApp(services: Services, session: RequestHandler): BuiltApp 
 
   const api = new Api(services);
   mountAll(api);
-  app.use(API_BASE, noStore, compression({ threshold: 2048 }), sameOrigin(env.PUBLIC_ORIGIN), express.json({ limit: '256kb' }));
+  app.use(
+    API_BASE,
+    noStore,
+    compression({ threshold: 2048 }),
+    sameOrigin(env.PUBLIC_ORIGIN),
+    express.json({ limit: '256kb' }),
+  );
   app.get(`${API_BASE}/openapi.json`, (_req, res) => void res.json(openApiDocument()));
   app.use(API_BASE, session, api.router, nothingHere);
 
@@ -64,7 +75,10 @@ const noStore: RequestHandler = (_req, res, next) => {
 /** Built files carry a hash in their name and are kept for good; the page itself is asked for each time. */
 function serveClient(app: Express, webDir: string): void {
   app.use(compression());
-  app.use('/assets', express.static(join(webDir, 'assets'), { index: false, immutable: true, maxAge: '365d', fallthrough: false }));
+  app.use(
+    '/assets',
+    express.static(join(webDir, 'assets'), { index: false, immutable: true, maxAge: '365d', fallthrough: false }),
+  );
   app.use(express.static(webDir, { index: false, maxAge: '1h' }));
   app.get('/{*path}', (req, res, next) => {
     if (req.path.startsWith('/api/') || req.path.startsWith('/socket.io/')) return next();

@@ -31,7 +31,11 @@ const HOUR_MS = 60 * 60 * 1000;
 const DRAIN_MS = 8000;
 
 /** Starts everything in the order it depends on each other, and stops it in the reverse one. */
-export async function startProcess(env: Env, http: HttpServer, clock: () => Date = () => new Date()): Promise<RunningProcess> {
+export async function startProcess(
+  env: Env,
+  http: HttpServer,
+  clock: () => Date = () => new Date(),
+): Promise<RunningProcess> {
   const log = createLogger(env.LOG_LEVEL);
   if (env.MIGRATE) await runMigrations(env.DATABASE_URL);
   const db = createDataSource(env.DATABASE_URL, env.DATABASE_POOL_SIZE);
@@ -57,7 +61,9 @@ export async function startProcess(env: Env, http: HttpServer, clock: () => Date
   });
   relay.start();
   const sweep = setInterval(() => {
-    Promise.all([forgetOldKeys(db.manager), forgetSentMessages(db)]).catch((error: unknown) => log.warn({ err: error }, 'sweep failed'));
+    Promise.all([forgetOldKeys(db.manager), forgetSentMessages(db)]).catch((error: unknown) =>
+      log.warn({ err: error }, 'sweep failed'),
+    );
   }, HOUR_MS);
   await new Promise<void>((resolve, reject) => {
     http.once('error', reject);

@@ -51,7 +51,13 @@ export interface SqlFragment {
  * @param alias table alias in the statement
  * @param firstParam number of the fragment's first `$n`
  */
-export function abilityToSql(ability: AppAbility, action: Action, name: SubjectName, alias: string, firstParam: number): SqlFragment {
+export function abilityToSql(
+  ability: AppAbility,
+  action: Action,
+  name: SubjectName,
+  alias: string,
+  firstParam: number,
+): SqlFragment {
   const columns = COLUMNS[name];
   if (!columns) throw new Error(`No columns are listed for ${name}`);
   const ast = rulesToAST(ability, action, name) as AstNode | null;

@@ -6,7 +6,9 @@ import { NotFound } from '../errors.ts';
  * commission. A person can be there twice, through two shops.
  */
 export function actingParty(actor: Actor, commissionId: string, concerned: readonly string[] = []): Membership {
-  const here = actor.memberships.filter((membership) => membership.commissionId === commissionId && membership.shopRole !== 'bookkeeper');
+  const here = actor.memberships.filter(
+    (membership) => membership.commissionId === commissionId && membership.shopRole !== 'bookkeeper',
+  );
   const acting = here.find((membership) => concerned.includes(membership.partyId)) ?? here[0];
   if (!acting) throw new NotFound();
   return acting;

@@ -48,7 +48,11 @@ export async function loadActor(
   scope: { commissionId?: string | null; everyOpenCommission?: boolean },
 ): Promise<KnownActor | null> {
   const commissionId = scope.commissionId && isUuid.test(scope.commissionId) ? scope.commissionId : null;
-  const [row] = await manager.query<ActorRow[]>(ACTOR_SQL, [accountId, commissionId, scope.everyOpenCommission ?? false]);
+  const [row] = await manager.query<ActorRow[]>(ACTOR_SQL, [
+    accountId,
+    commissionId,
+    scope.everyOpenCommission ?? false,
+  ]);
   if (!row) return null;
   return {
     person: {

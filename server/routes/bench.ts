@@ -15,9 +15,17 @@ export function mountBench(api: Api): void {
   api.signedIn(contracts.listMoved, async (ctx, { params: { commissionId }, query }) => {
     authorizeCommissionSight(ctx.ability, commissionId);
     if (query.cursor !== undefined && !/^\d{1,18}$/.test(query.cursor))
-      throw new InputInvalid([{ pointer: '/query/cursor', message: 'This page mark is not one of ours; start from the first page' }]);
-    const mine = ctx.actor.memberships.filter((one) => one.commissionId === commissionId && one.shopRole !== 'bookkeeper').map((one) => one.partyId);
-    const rows = await loadMoved(ctx.manager, mine, { commissionId, limit: query.limit + 1, ...(query.cursor ? { before: query.cursor } : {}) });
+      throw new InputInvalid([
+        { pointer: '/query/cursor', message: 'This page mark is not one of ours; start from the first page' },
+      ]);
+    const mine = ctx.actor.memberships
+      .filter((one) => one.commissionId === commissionId && one.shopRole !== 'bookkeeper')
+      .map((one) => one.partyId);
+    const rows = await loadMoved(ctx.manager, mine, {
+      commissionId,
+      limit: query.limit + 1,
+      ...(query.cursor ? { before: query.cursor } : {}),
+    });
     const items = rows.slice(0, query.limit);
     return { items, nextCursor: rows.length > query.limit ? (items.at(-1)?.id ?? null) : null };
   });

@@ -20,5 +20,7 @@ export function mountCommissions(api: Api): void {
   api.signedIn(contracts.getCommission, async (ctx, { params }) =>
     presentCommission(ctx.ability, ctx.actor, await loadCommission(ctx.manager, ctx.ability, params.commissionId)),
   );
-  api.signedIn(contracts.updateCommission, async (ctx, input) => presentCommission(ctx.ability, ctx.actor, await updateCommission(ctx, input)));
+  api.signedIn(contracts.updateCommission, async (ctx, input) =>
+    presentCommission(ctx.ability, ctx.actor, await updateCommission(ctx, input)),
+  );
 }

@@ -24,7 +24,9 @@ const thenShown =
 export function mountHandoffs(api: Api): void {
   api.signedIn(contracts.listHandoffs, async (ctx, { params: { commissionId } }) => {
     authorizeCommissionSight(ctx.ability, commissionId);
-    return (await loadVisibleHandoffs(ctx.manager, ctx.ability, commissionId)).map((row) => presentHandoff(ctx.ability, row));
+    return (await loadVisibleHandoffs(ctx.manager, ctx.ability, commissionId)).map((row) =>
+      presentHandoff(ctx.ability, row),
+    );
   });
   api.signedIn(contracts.getHandoff, (ctx, { params }) => shownHandoff(ctx, params.commissionId, params.handoffId));
   api.signedIn(contracts.createHandoff, thenShown(createHandoff));

@@ -9,7 +9,13 @@ export function mountParties(api: Api): void {
   api.signedIn(contracts.listParties, listParties);
   api.signedIn(contracts.inviteParty, async (ctx, input) => {
     const row = await inviteParty(ctx, input);
-    return { id: row.id, email: row.email, roles: row.roles, invitedAt: row.createdAt.toISOString(), expiresAt: row.expiresAt.toISOString() };
+    return {
+      id: row.id,
+      email: row.email,
+      roles: row.roles,
+      invitedAt: row.createdAt.toISOString(),
+      expiresAt: row.expiresAt.toISOString(),
+    };
   });
   api.signedIn(contracts.withdrawInvitation, async (ctx, input) => {
     await withdrawInvitation(ctx, input);

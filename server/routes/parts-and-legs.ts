@@ -17,7 +17,9 @@ export function mountPartsAndLegs(api: Api): void {
   api.signedIn(contracts.listParts, async (ctx, { params: { commissionId } }) => {
     authorizeCommissionSight(ctx.ability, commissionId);
     if (!mayDo(ctx.ability, 'read', 'Part', { commissionId })) throw new NotPermitted();
-    return (await ctx.manager.find(Part, { where: { commissionId }, order: { position: 'ASC', id: 'ASC' } })).map(presentPart);
+    return (await ctx.manager.find(Part, { where: { commissionId }, order: { position: 'ASC', id: 'ASC' } })).map(
+      presentPart,
+    );
   });
   api.signedIn(contracts.createPart, async (ctx, input) => presentPart(await createPart(ctx, input)));
   api.signedIn(contracts.updatePart, async (ctx, input) => presentPart(await updatePart(ctx, input)));

@@ -15,11 +15,29 @@ export const addDays = (day: IsoDay, count: number): IsoDay => asDay(addDaysToDa
 export const daysBetween = (from: IsoDay, to: IsoDay): number => differenceInCalendarDays(asDate(to), asDate(from));
 
 const WEEKDAYS = ['Sunday', 'Monday', 'Tuesday', 'Wednesday', 'Thursday', 'Friday', 'Saturday'] as const;
-const MONTHS = ['January', 'February', 'March', 'April', 'May', 'June', 'July', 'August', 'September', 'October', 'November', 'December'] as const;
+const MONTHS = [
+  'January',
+  'February',
+  'March',
+  'April',
+  'May',
+  'June',
+  'July',
+  'August',
+  'September',
+  'October',
+  'November',
+  'December',
+] as const;
 
 const parts = (day: IsoDay): { weekday: string; date: number; month: string; year: number } => {
   const date = asDate(day);
-  return { weekday: WEEKDAYS[date.getDay()] ?? '', date: date.getDate(), month: MONTHS[date.getMonth()] ?? '', year: date.getFullYear() };
+  return {
+    weekday: WEEKDAYS[date.getDay()] ?? '',
+    date: date.getDate(),
+    month: MONTHS[date.getMonth()] ?? '',
+    year: date.getFullYear(),
+  };
 };
 
 /** "Thursday 12 March". */

@@ -11,7 +11,11 @@ const MARK = /\s*(mm|millimetres?|millimeters?|in|inch|inches|"|″|'')\.?$/i;
 const DECIMAL = /^\d+(?:[.,]\d+)?$|^[.,]\d+$/;
 const MIXED = /^(?:(\d+)[\s-]+)?(\d+)\s*[/⁄]\s*(\d+)$/;
 
-const refuse = (reason: Extract<LengthReading, { ok: false }>['reason'], message: string): LengthReading => ({ ok: false, reason, message });
+const refuse = (reason: Extract<LengthReading, { ok: false }>['reason'], message: string): LengthReading => ({
+  ok: false,
+  reason,
+  message,
+});
 
 /**
  * Reads a typed length: millimetres (`31.957`, `31,957 mm`), decimal inches (`1.2582 in`, `1.2582"`) or fractions
@@ -33,9 +37,12 @@ export function parseLength(typed: string, unitHint: LengthUnit = 'mm'): LengthR
     if (Number(under) === 0) return refuse('zero-denominator', 'A fraction can not be over zero');
     return positive((Number(whole) + Number(over) / Number(under)) * MM_PER_INCH, 'inch-fraction');
   }
-  if (/[.,].*[.,]/.test(bare)) return refuse('ambiguous', `${typed.trim()} can be read two ways; write one point or comma`);
-  if (!DECIMAL.test(bare)) return refuse('unreadable', `${typed.trim()} is not a length; write 31.95, 1.258 in or 1 17/64`);
-  const unit: LengthUnit = mark === undefined ? (unitHint === 'inch-fraction' ? 'inch' : unitHint) : mark.startsWith('m') ? 'mm' : 'inch';
+  if (/[.,].*[.,]/.test(bare))
+    return refuse('ambiguous', `${typed.trim()} can be read two ways; write one point or comma`);
+  if (!DECIMAL.test(bare))
+    return refuse('unreadable', `${typed.trim()} is not a length; write 31.95, 1.258 in or 1 17/64`);
+  const unit: LengthUnit =
+    mark === undefined ? (unitHint === 'inch-fraction' ? 'inch' : unitHint) : mark.startsWith('m') ? 'mm' : 'inch';
   const value = Number(bare.replace(',', '.'));
   return positive(unit === 'mm' ? value : value * MM_PER_INCH, unit);
 }
@@ -47,7 +54,8 @@ const positive = (valueMm: number, unit: LengthUnit): LengthReading =>
  * True when a reading is so far from the nominal size that a unit was mixed up (inch for mm, um for mm): more than twice
  * or less than half of it.
  */
-export const looksLikeUnitMixUp = (valueMm: number, nominalMm: number): boolean => valueMm > nominalMm * 2 || valueMm < nominalMm / 2;
+export const looksLikeUnitMixUp = (valueMm: number, nominalMm: number): boolean =>
+  valueMm > nominalMm * 2 || valueMm < nominalMm / 2;
 
 const MINUS = '−';
 const withSign = (value: number, digits: number): string => {

@@ -18,10 +18,18 @@ export const createCommission = (ctx: RequestContext, { body }: ParsedInput<type
     const { leadShopId, alsoRoles, ...fields } = body;
     if (!mayDo(ctx.ability, 'create', 'NewCommission', { leadShopId }))
       throw new NotPermitted('Only an owner or hand of the shop can open a commission in its name.');
-    const row = await uow.manager.save(uow.manager.create(Commission, { ...fields, code: newCode(), updatedAt: ctx.now }));
+    const row = await uow.manager.save(
+      uow.manager.create(Commission, { ...fields, code: newCode(), updatedAt: ctx.now }),
+    );
     await uow.manager.insert(Party, { commissionId: row.id, shopId: leadShopId, roles: ['lead', ...alsoRoles] });
     await refreshCommissionNames(uow.manager, row.id);
-    uow.record({ commissionId: row.id, accountId: ctx.actor.accountId, subject: 'commission', subjectId: row.id, words: `Opened the commission ${row.title}` });
+    uow.record({
+      commissionId: row.id,
+      accountId: ctx.actor.accountId,
+      subject: 'commission',
+      subjectId: row.id,
+      words: `Opened the commission ${row.title}`,
+    });
     uow.announce('commission.changed', { commissionId: row.id }, { to: 'everyone', commissionId: row.id });
     return uow.manager.findOneByOrFail(Commission, { id: row.id });
   });

@@ -12,26 +12,54 @@ import { loadConsents } from '../../queries/fit-reports/load-consents.ts';
 import { announceReport } from './report-act.ts';
 
 /** The client's yes or no to a rework that shows. It is given once; a new rework note asks anew. */
-export const answerConsent = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<ConsentView> =>
+export const answerConsent = (
+  ctx: RequestContext,
+  { params, body }: ParsedInput<typeof contract>,
+): Promise<ConsentView> =>
   inTransaction(ctx, async (uow) => {
     const { commissionId, noteId } = params;
     authorize(ctx.ability, 'consent', 'Consent', { commissionId });
-    const note = await uow.manager.findOne(ReworkNote, { where: { id: noteId, consentState: In(['asked', 'given', 'refused']) }, lock: { mode: 'pessimistic_write' } });
-    const report = note && (await uow.manager.findOne(FitReport, { where: { id: note.reportId, commissionId }, lock: { mode: 'pessimistic_write' } }));
-    if (!note || !report) throw new NotFound();
-    if (note.consentState !== 'asked') throw new NotInThisState(`This was answered already: consent ${note.consentState}. Nothing was changed.`);
-    await uow.manager.update(ReworkNote, { id: noteId }, {
-      consentState: body.given ? 'given' : 'refused', consentAnsweredAt: ctx.now, consentByAccountId: ctx.actor.accountId, consentWords: body.words,
+    const note = await uow.manager.findOne(ReworkNote, {
+      where: { id: noteId, consentState: In(['asked', 'given', 'refused']) },
+      lock: { mode: 'pessimistic_write' },
     });
+    const report =
+      note &&
+      (await uow.manager.findOne(FitReport, {
+        where: { id: note.reportId, commissionId },
+        lock: { mode: 'pessimistic_write' },
+      }));
+    if (!note || !report) throw new NotFound();
+    if (note.consentState !== 'asked')
+      throw new NotInThisState(`This was answered already: consent ${note.consentState}. Nothing was changed.`);
+    await uow.manager.update(
+      ReworkNote,
+      { id: noteId },
+      {
+        consentState: body.given ? 'given' : 'refused',
+        consentAnsweredAt: ctx.now,
+        consentByAccountId: ctx.actor.accountId,
+        consentWords: body.words,
+      },
+    );
     report.revision += 1;
     await uow.manager.save(report);
     await uow.manager.insert(ReportEvent, {
-      reportId: report.id, act: body.given ? 'consent-given' : 'consent-refused', fromState: report.state, toState: report.state,
-      accountId: ctx.actor.accountId, words: body.words,
+      reportId: report.id,
+      act: body.given ? 'consent-given' : 'consent-refused',
+      fromState: report.state,
+      toState: report.state,
+      accountId: ctx.actor.accountId,
+      words: body.words,
     });
     uow.record({
-      commissionId, accountId: ctx.actor.accountId, subject: 'report', subjectId: report.id, clientMayRead: false,
-      words: body.given ? 'The client consents to what will show' : 'The client refuses what would show', partyIds: [report.raisedByPartyId, report.answerPartyId],
+      commissionId,
+      accountId: ctx.actor.accountId,
+      subject: 'report',
+      subjectId: report.id,
+      clientMayRead: false,
+      words: body.given ? 'The client consents to what will show' : 'The client refuses what would show',
+      partyIds: [report.raisedByPartyId, report.answerPartyId],
     });
     uow.announce('consent.changed', { commissionId }, { to: 'everyone', commissionId });
     announceReport(uow, report);

@@ -6,17 +6,26 @@ import { requireParties } from '../../queries/parties/load-party.ts';
 import { reportAct } from './report-act.ts';
 
 /** Adds a rework note. A note that was offered before and not agreed steps back for the new one. */
-export const answerFitReport = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<FitReportDetail> =>
-  reportAct(ctx, { ...params, revision: body.revision, action: 'answer', act: 'answer', words: body.method }, async (uow, report, earlier) => {
-    const { revision: _revision, ...fields } = body;
-    if (body.costBorneByPartyId) await requireParties(uow.manager, params.commissionId, [['/body/costBorneByPartyId', body.costBorneByPartyId]]);
-    if (earlier?.state === 'offered') await uow.manager.update(ReworkNote, { id: earlier.id }, { state: 'other-limits-asked' });
-    await uow.manager.insert(ReworkNote, {
-      ...fields,
-      whereItShows: fields.shows ? fields.whereItShows : '',
-      reportId: report.id,
-      partyId: report.answerPartyId,
-      accountId: ctx.actor.accountId,
-      createdAt: ctx.now,
-    });
-  });
+export const answerFitReport = (
+  ctx: RequestContext,
+  { params, body }: ParsedInput<typeof contract>,
+): Promise<FitReportDetail> =>
+  reportAct(
+    ctx,
+    { ...params, revision: body.revision, action: 'answer', act: 'answer', words: body.method },
+    async (uow, report, earlier) => {
+      const { revision: _revision, ...fields } = body;
+      if (body.costBorneByPartyId)
+        await requireParties(uow.manager, params.commissionId, [['/body/costBorneByPartyId', body.costBorneByPartyId]]);
+      if (earlier?.state === 'offered')
+        await uow.manager.update(ReworkNote, { id: earlier.id }, { state: 'other-limits-asked' });
+      await uow.manager.insert(ReworkNote, {
+        ...fields,
+        whereItShows: fields.shows ? fields.whereItShows : '',
+        reportId: report.id,
+        partyId: report.answerPartyId,
+        accountId: ctx.actor.accountId,
+        createdAt: ctx.now,
+      });
+    },
+  );

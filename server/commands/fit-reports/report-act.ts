@@ -12,7 +12,11 @@ import { loadReportDetail } from '../../queries/fit-reports/load-report.ts';
 
 /** The note that the report's next step is about: the newest one that was not sent back. */
 export async function currentNote(uow: UnitOfWork, reportId: string): Promise<ReworkNote | null> {
-  const [note] = await uow.manager.find(ReworkNote, { where: { reportId }, order: { createdAt: 'DESC', id: 'DESC' }, take: 1 });
+  const [note] = await uow.manager.find(ReworkNote, {
+    where: { reportId },
+    order: { createdAt: 'DESC', id: 'DESC' },
+    take: 1,
+  });
   return note && note.state !== 'other-limits-asked' ? note : null;
 }
 
@@ -30,7 +34,11 @@ interface ActInput {
 export function announceReport(uow: UnitOfWork, report: FitReport): void {
   const { commissionId } = report;
   const partyIds = [report.raisedByPartyId, report.answerPartyId];
-  uow.announce('fit-report.changed', { commissionId, reportId: report.id, jointId: report.jointId }, { to: 'parties', commissionId, partyIds });
+  uow.announce(
+    'fit-report.changed',
+    { commissionId, reportId: report.id, jointId: report.jointId },
+    { to: 'parties', commissionId, partyIds },
+  );
   if (report.heldLegId) uow.announce('legs.changed', { commissionId }, { to: 'everyone', commissionId });
   uow.announce('standing.changed', { commissionId }, { to: 'everyone', commissionId });
 }
@@ -46,21 +54,39 @@ export const reportAct = (
 ): Promise<FitReportDetail> =>
   inTransaction(ctx, async (uow) => {
     const { commissionId, reportId } = input;
-    const report = await uow.manager.findOne(FitReport, { where: { id: reportId, commissionId }, lock: { mode: 'pessimistic_write' } });
+    const report = await uow.manager.findOne(FitReport, {
+      where: { id: reportId, commissionId },
+      lock: { mode: 'pessimistic_write' },
+    });
     authorize(ctx.ability, input.action, 'FitReport', report);
-    if (report.revision !== input.revision) throw new StaleRevision(await loadReportDetail(uow.manager, commissionId, reportId));
+    if (report.revision !== input.revision)
+      throw new StaleRevision(await loadReportDetail(uow.manager, commissionId, reportId));
     const note = await currentNote(uow, reportId);
-    const next = nextReportState({ state: report.state, shows: note?.shows ?? false, consent: note?.consentState ?? null }, input.act);
+    const next = nextReportState(
+      { state: report.state, shows: note?.shows ?? false, consent: note?.consentState ?? null },
+      input.act,
+    );
     if (!next.ok) throw new NotInThisState(next.words);
     const fromState = report.state;
     report.state = next.state;
     report.revision += 1;
     await change(uow, report, note);
     await uow.manager.save(report);
-    await uow.manager.insert(ReportEvent, { reportId, act: input.act, fromState, toState: next.state, accountId: ctx.actor.accountId, words: input.words });
+    await uow.manager.insert(ReportEvent, {
+      reportId,
+      act: input.act,
+      fromState,
+      toState: next.state,
+      accountId: ctx.actor.accountId,
+      words: input.words,
+    });
     uow.record({
-      commissionId, accountId: ctx.actor.accountId, subject: 'report', subjectId: reportId,
-      words: `${HISTORY_WORDS[input.act]}: ${report.title}`, partyIds: [report.raisedByPartyId, report.answerPartyId],
+      commissionId,
+      accountId: ctx.actor.accountId,
+      subject: 'report',
+      subjectId: reportId,
+      words: `${HISTORY_WORDS[input.act]}: ${report.title}`,
+      partyIds: [report.raisedByPartyId, report.answerPartyId],
     });
     announceReport(uow, report);
     return loadReportDetail(uow.manager, commissionId, reportId);

@@ -9,12 +9,19 @@ import { loadReportDetail } from '../../queries/fit-reports/load-report.ts';
 import { announceReport } from './report-act.ts';
 
 /** The lead releases the words in which the client reads of a report. */
-export const writeClientWords = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<FitReportDetail> =>
+export const writeClientWords = (
+  ctx: RequestContext,
+  { params, body }: ParsedInput<typeof contract>,
+): Promise<FitReportDetail> =>
   inTransaction(ctx, async (uow) => {
     const { commissionId, reportId } = params;
-    const report = await uow.manager.findOne(FitReport, { where: { id: reportId, commissionId }, lock: { mode: 'pessimistic_write' } });
+    const report = await uow.manager.findOne(FitReport, {
+      where: { id: reportId, commissionId },
+      lock: { mode: 'pessimistic_write' },
+    });
     authorize(ctx.ability, 'word', 'FitReport', report);
-    if (report.revision !== body.revision) throw new StaleRevision(await loadReportDetail(uow.manager, commissionId, reportId));
+    if (report.revision !== body.revision)
+      throw new StaleRevision(await loadReportDetail(uow.manager, commissionId, reportId));
     report.clientWords = body.clientWords;
     report.revision += 1;
     await uow.manager.save(report);

@@ -11,8 +11,13 @@ export function announceHandoff(
 ): void {
   const { commissionId } = handoff;
   uow.record({
-    commissionId, accountId: ctx.actor.accountId, subject: 'handoff', subjectId: handoff.id, words,
-    partyIds: clientMayRead ? null : [handoff.fromPartyId, handoff.toPartyId], clientMayRead,
+    commissionId,
+    accountId: ctx.actor.accountId,
+    subject: 'handoff',
+    subjectId: handoff.id,
+    words,
+    partyIds: clientMayRead ? null : [handoff.fromPartyId, handoff.toPartyId],
+    clientMayRead,
   });
   uow.announce('handoff.changed', { commissionId, handoffId: handoff.id }, { to: 'everyone', commissionId });
   uow.announce('standing.changed', { commissionId }, { to: 'everyone', commissionId });

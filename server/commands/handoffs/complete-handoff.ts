@@ -22,8 +22,12 @@ export const completeHandoff = (ctx: RequestContext, { params, body }: ParsedInp
     authorize(ctx.ability, 'receive', 'Handoff', handoff);
     await guardHandoff(ctx, uow.manager, handoff, body.revision);
     if (handoff.doneOn) throw new NotInThisState('These parts were received already.');
-    if (body.onDay > ctx.todayIso) throw new InputInvalid([{ pointer: '/body/onDay', message: 'Parts can not have arrived on a day to come' }]);
-    const parts = await uow.manager.find(Part, { where: { id: In(handoff.partIds), commissionId }, lock: { mode: 'pessimistic_write' } });
+    if (body.onDay > ctx.todayIso)
+      throw new InputInvalid([{ pointer: '/body/onDay', message: 'Parts can not have arrived on a day to come' }]);
+    const parts = await uow.manager.find(Part, {
+      where: { id: In(handoff.partIds), commissionId },
+      lock: { mode: 'pessimistic_write' },
+    });
     const elsewhere = parts.filter((part) => part.holderPartyId !== handoff.fromPartyId);
     if (elsewhere.length > 0) {
       const names = await partyNames(uow.manager, commissionId);
@@ -31,16 +35,32 @@ export const completeHandoff = (ctx: RequestContext, { params, body }: ParsedInp
         `${elsewhere.map((part) => `${part.name} is with ${names.get(part.holderPartyId)}`).join('; ')}. The lead can correct the holder; nothing was changed.`,
       );
     }
-    for (const part of parts) Object.assign(part, { holderPartyId: handoff.toPartyId, holderSince: body.onDay, revision: part.revision + 1 });
+    for (const part of parts)
+      Object.assign(part, { holderPartyId: handoff.toPartyId, holderSince: body.onDay, revision: part.revision + 1 });
     await uow.manager.save(parts);
-    await uow.manager.update(HandoffOffer, { handoffId, state: 'standing' }, { state: 'withdrawn', answeredAt: ctx.now, answeredByAccountId: ctx.actor.accountId });
+    await uow.manager.update(
+      HandoffOffer,
+      { handoffId, state: 'standing' },
+      { state: 'withdrawn', answeredAt: ctx.now, answeredByAccountId: ctx.actor.accountId },
+    );
     handoff.doneOn = body.onDay;
     handoff.revision += 1;
     await uow.manager.save(handoff);
     const receiver = await uow.manager.findOneByOrFail(Party, { id: handoff.toPartyId });
-    if (receiver.roles.includes('client')) await uow.manager.update(Commission, { id: commissionId }, { deliveredOn: body.onDay, state: 'delivered', updatedAt: ctx.now });
+    if (receiver.roles.includes('client'))
+      await uow.manager.update(
+        Commission,
+        { id: commissionId },
+        { deliveredOn: body.onDay, state: 'delivered', updatedAt: ctx.now },
+      );
     const name = (await partyNames(uow.manager, commissionId)).get(handoff.toPartyId) ?? '';
-    announceHandoff(uow, ctx, handoff, `${name} received ${parts.map((part) => part.name).join(', ')} on ${weekdayDayMonth(body.onDay)}`, true);
+    announceHandoff(
+      uow,
+      ctx,
+      handoff,
+      `${name} received ${parts.map((part) => part.name).join(', ')} on ${weekdayDayMonth(body.onDay)}`,
+      true,
+    );
     uow.announce('parts.changed', { commissionId }, { to: 'everyone', commissionId });
     return handoffId;
   });

@@ -46,12 +46,17 @@ const handoffAct = (
     await guardHandoff(ctx, uow.manager, handoff, input.revision);
     const standing = await uow.manager.findOneBy(HandoffOffer, { handoffId, state: 'standing' });
     const mine = ctx.actor.memberships.filter((one) => one.commissionId === commissionId).map((one) => one.partyId);
-    if (input.offerId && standing?.id !== input.offerId) throw new NotInThisState('That offer does not stand any more. Look at what stands now.');
+    if (input.offerId && standing?.id !== input.offerId)
+      throw new NotInThisState('That offer does not stand any more. Look at what stands now.');
     const answer = checkOfferAct({ ...handoff, standing }, act, mine, onDay);
     if (!answer.ok) throw new NotInThisState(answer.words);
     const sides = [handoff.fromPartyId, handoff.toPartyId];
     // Who holds both sides answers for the one that did not offer.
-    const { partyId } = actingParty(ctx.actor, commissionId, standing && act !== 'withdraw' ? sides.filter((id) => id !== standing.byPartyId) : sides);
+    const { partyId } = actingParty(
+      ctx.actor,
+      commissionId,
+      standing && act !== 'withdraw' ? sides.filter((id) => id !== standing.byPartyId) : sides,
+    );
     const name = (await partyNames(uow.manager, commissionId)).get(partyId) ?? '';
     const words = await change(uow, { handoff, standing, side: { partyId, name } }, answer.answers);
     handoff.revision += 1;
@@ -63,7 +68,12 @@ const handoffAct = (
 const lockHandoff = (manager: EntityManager, commissionId: string, handoffId: string): Promise<Handoff | null> =>
   manager.findOne(Handoff, { where: { id: handoffId, commissionId }, lock: { mode: 'pessimistic_write' } });
 
-async function guardHandoff(ctx: RequestContext, manager: EntityManager, handoff: Handoff, revision: number): Promise<void> {
+async function guardHandoff(
+  ctx: RequestContext,
+  manager: EntityManager,
+  handoff: Handoff,
+  revision: number,
+): Promise<void> {
   if (handoff.revision === revision) return;
   const record = await loadHandoff(manager, handoff.commissionId, handoff.id);
   guardRevision(handoff, revision, () => record && presentHandoff(ctx.ability, record));
@@ -81,9 +91,15 @@ export const offerHandoffDay = (ctx: RequestContext, { params, body }: Input<'of
     { ...params, revision: body.revision },
     'offer',
     async (uow, { handoff, standing, side }, answers) => {
-      if (standing && answers) await uow.manager.update(HandoffOffer, { id: standing.id }, { state: answers, ...answered(ctx) });
+      if (standing && answers)
+        await uow.manager.update(HandoffOffer, { id: standing.id }, { state: answers, ...answered(ctx) });
       await uow.manager.insert(HandoffOffer, {
-        handoffId: handoff.id, byPartyId: side.partyId, byAccountId: ctx.actor.accountId, onDay: body.onDay, words: body.words, createdAt: ctx.now,
+        handoffId: handoff.id,
+        byPartyId: side.partyId,
+        byAccountId: ctx.actor.accountId,
+        onDay: body.onDay,
+        words: body.words,
+        createdAt: ctx.now,
       });
       return `${side.name} ${answers === 'countered' ? 'countered with' : 'offered'} ${weekdayDayMonth(body.onDay)}`;
     },
@@ -101,11 +117,18 @@ export const acceptHandoffDay = (ctx: RequestContext, { params, body }: Input<'a
 export const declineHandoffDay = (ctx: RequestContext, { params, body }: Input<'declineHandoffDay'>): Promise<string> =>
   handoffAct(ctx, { ...params, revision: body.revision }, 'decline', async (uow, { standing, side }) => {
     if (!standing) throw new NotInThisState('No offer stands.');
-    await uow.manager.update(HandoffOffer, { id: standing.id }, { state: 'declined', reason: body.reason, ...answered(ctx) });
+    await uow.manager.update(
+      HandoffOffer,
+      { id: standing.id },
+      { state: 'declined', reason: body.reason, ...answered(ctx) },
+    );
     return `${side.name} declined ${weekdayDayMonth(standing.onDay)}: ${body.reason}`;
   });
 
-export const withdrawHandoffDay = (ctx: RequestContext, { params, body }: Input<'withdrawHandoffDay'>): Promise<string> =>
+export const withdrawHandoffDay = (
+  ctx: RequestContext,
+  { params, body }: Input<'withdrawHandoffDay'>,
+): Promise<string> =>
   handoffAct(ctx, { ...params, revision: body.revision }, 'withdraw', async (uow, { standing, side }) => {
     if (!standing) throw new NotInThisState('No offer stands.');
     await uow.manager.update(HandoffOffer, { id: standing.id }, { state: 'withdrawn', ...answered(ctx) });

@@ -30,10 +30,16 @@ function parseReadings(body: Body, nominalMm: number): number[] {
 }
 
 /** Adds one set of readings of one side. The joint's row is locked, so that sets get their numbers one after another. */
-export const addReadings = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<ReadingRecord[]> =>
+export const addReadings = (
+  ctx: RequestContext,
+  { params, body }: ParsedInput<typeof contract>,
+): Promise<ReadingRecord[]> =>
   inTransaction(ctx, async (uow) => {
     const { commissionId, jointId } = params;
-    const joint = await uow.manager.findOne(Joint, { where: { id: jointId, commissionId }, lock: { mode: 'pessimistic_write' } });
+    const joint = await uow.manager.findOne(Joint, {
+      where: { id: jointId, commissionId },
+      lock: { mode: 'pessimistic_write' },
+    });
     authorize(ctx.ability, 'measure', 'Joint', joint);
     const valuesMm = parseReadings(body, joint.nominalMm);
     if (body.reportId && (await uow.manager.countBy(FitReport, { id: body.reportId, jointId })) === 0)
@@ -47,7 +53,9 @@ export const addReadings = (ctx: RequestContext, { params, body }: ParsedInput<t
     await uow.manager.insert(
       Reading,
       body.readings.map((reading, position) => ({
-        jointId, position, partyId,
+        jointId,
+        position,
+        partyId,
         reportId: body.reportId,
         side: body.side,
         setNumber: next,
@@ -64,7 +72,11 @@ export const addReadings = (ctx: RequestContext, { params, body }: ParsedInput<t
       })),
     );
     uow.record({
-      commissionId, accountId: ctx.actor.accountId, subject: 'joint', subjectId: jointId, partyIds,
+      commissionId,
+      accountId: ctx.actor.accountId,
+      subject: 'joint',
+      subjectId: jointId,
+      partyIds,
       words: `Measured the ${body.side === 'hole' ? 'bore' : 'spigot'} of ${joint.name}, ${body.readings.length} ${body.readings.length === 1 ? 'reading' : 'readings'}`,
     });
     uow.announce('joint.changed', { commissionId, jointId }, { to: 'parties', commissionId, partyIds });

@@ -10,7 +10,10 @@ import { loadJoint, type JointRecord } from '../../queries/joints/load-joints.ts
 import { given, guardRevision } from '../revision.ts';
 import { checkJoint } from './check-joint.ts';
 
-export const updateJoint = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<JointRecord> =>
+export const updateJoint = (
+  ctx: RequestContext,
+  { params, body }: ParsedInput<typeof contract>,
+): Promise<JointRecord> =>
   inTransaction(ctx, async (uow) => {
     const { commissionId, jointId } = params;
     await uow.manager.findOne(Joint, { where: { id: jointId, commissionId }, lock: { mode: 'pessimistic_write' } });
@@ -25,7 +28,14 @@ export const updateJoint = (ctx: RequestContext, { params, body }: ParsedInput<t
     if (!saved) throw new NotFound();
     // Those who answered for it until now hear of the change too.
     const partyIds = [...new Set([row.holePartyId, row.shaftPartyId, saved.holePartyId, saved.shaftPartyId])];
-    uow.record({ commissionId, accountId: ctx.actor.accountId, subject: 'joint', subjectId: jointId, words: `Changed the joint ${saved.name}`, partyIds });
+    uow.record({
+      commissionId,
+      accountId: ctx.actor.accountId,
+      subject: 'joint',
+      subjectId: jointId,
+      words: `Changed the joint ${saved.name}`,
+      partyIds,
+    });
     uow.announce('joint.changed', { commissionId, jointId }, { to: 'parties', commissionId, partyIds });
     return saved;
   });

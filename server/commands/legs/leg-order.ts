@@ -5,7 +5,12 @@ import type { LegRecord } from '../../queries/legs/load-legs.ts';
 import { findLoop } from '../../../shared/engines/schedule/find-loop.ts';
 
 /** Sets what a leg waits for. Legs of another commission are refused, and so is a loop, with its path by the legs' titles. */
-export async function setLegOrder(manager: EntityManager, legs: readonly LegRecord[], leg: { id: string; title: string }, afterLegIds: readonly string[]): Promise<void> {
+export async function setLegOrder(
+  manager: EntityManager,
+  legs: readonly LegRecord[],
+  leg: { id: string; title: string },
+  afterLegIds: readonly string[],
+): Promise<void> {
   const pointer = '/body/afterLegIds';
   const titles = new Map([...legs.map((one) => [one.id, one.title] as const), [leg.id, leg.title] as const]);
   const unknown = afterLegIds.filter((id) => !titles.has(id));
@@ -13,7 +18,17 @@ export async function setLegOrder(manager: EntityManager, legs: readonly LegReco
   const waits = new Map(legs.map((one) => [one.id, one.afterLegIds]));
   waits.set(leg.id, [...afterLegIds]);
   const loop = findLoop(waits);
-  if (loop) throw new InputInvalid([{ pointer, message: `These legs would wait for each other in a circle: ${loop.map((id) => titles.get(id)).join(' → ')}` }]);
+  if (loop)
+    throw new InputInvalid([
+      {
+        pointer,
+        message: `These legs would wait for each other in a circle: ${loop.map((id) => titles.get(id)).join(' → ')}`,
+      },
+    ]);
   await manager.delete(LegOrder, { legId: leg.id });
-  if (afterLegIds.length > 0) await manager.insert(LegOrder, [...new Set(afterLegIds)].map((afterLegId) => ({ legId: leg.id, afterLegId })));
+  if (afterLegIds.length > 0)
+    await manager.insert(
+      LegOrder,
+      [...new Set(afterLegIds)].map((afterLegId) => ({ legId: leg.id, afterLegId })),
+    );
 }

@@ -12,7 +12,12 @@ import { loadAllLegs, loadLeg, type LegRecord } from '../../queries/legs/load-le
 import { guardRevision } from '../revision.ts';
 import { announceLegs } from './announce-legs.ts';
 
-const WORDS = { planned: 'Put back to planned', 'under-way': 'Started', finished: 'Finished', dropped: 'Dropped' } as const;
+const WORDS = {
+  planned: 'Put back to planned',
+  'under-way': 'Started',
+  finished: 'Finished',
+  dropped: 'Dropped',
+} as const;
 
 export const moveLeg = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<LegRecord> =>
   inTransaction(ctx, async (uow) => {
@@ -23,7 +28,9 @@ export const moveLeg = (ctx: RequestContext, { params, body }: ParsedInput<typeo
     const leg = legs.find((one) => one.id === legId) ?? null;
     authorize(ctx.ability, body.state === 'dropped' ? 'drop' : 'move', 'Leg', leg);
     guardRevision(leg, body.revision, () => presentLeg(ctx.ability, leg));
-    const unfinished = legs.filter((one) => leg.afterLegIds.includes(one.id) && one.state !== 'finished' && one.state !== 'dropped');
+    const unfinished = legs.filter(
+      (one) => leg.afterLegIds.includes(one.id) && one.state !== 'finished' && one.state !== 'dropped',
+    );
     const move = checkLegMove(
       { state: leg.state, held: leg.heldBy !== null, waitsFor: unfinished.map((one) => one.title) },
       { to: body.state, early: body.early },
@@ -31,13 +38,17 @@ export const moveLeg = (ctx: RequestContext, { params, body }: ParsedInput<typeo
     if (!move.ok) throw new NotInThisState(move.words);
     if (body.state === 'finished' && leg.startedOn && body.onDay < leg.startedOn)
       throw new InputInvalid([{ pointer: '/body/onDay', message: 'A leg can not be finished before it was started' }]);
-    await uow.manager.update(Leg, { id: legId }, {
-      state: body.state,
-      revision: leg.revision + 1,
-      ...(body.state === 'under-way' ? { startedOn: leg.startedOn ?? body.onDay, finishedOn: null } : {}),
-      ...(body.state === 'finished' ? { finishedOn: body.onDay } : {}),
-      ...(body.state === 'planned' ? { startedOn: null, finishedOn: null } : {}),
-    });
+    await uow.manager.update(
+      Leg,
+      { id: legId },
+      {
+        state: body.state,
+        revision: leg.revision + 1,
+        ...(body.state === 'under-way' ? { startedOn: leg.startedOn ?? body.onDay, finishedOn: null } : {}),
+        ...(body.state === 'finished' ? { finishedOn: body.onDay } : {}),
+        ...(body.state === 'planned' ? { startedOn: null, finishedOn: null } : {}),
+      },
+    );
     announceLegs(uow, ctx, commissionId, leg, `${WORDS[body.state]}: ${leg.title}`, true);
     const saved = await loadLeg(uow.manager, commissionId, legId);
     if (!saved) throw new NotFound();

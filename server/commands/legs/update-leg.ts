@@ -26,18 +26,25 @@ export const updateLeg = (ctx: RequestContext, { params, body }: ParsedInput<typ
     const { revision, afterLegIds, ...rest } = body;
     const changes = given(rest);
     const settable = fieldsFor(ctx.ability, 'update', 'Leg', leg, []);
-    const refused = [...Object.keys(changes), ...(afterLegIds ? ['afterLegIds'] : [])].filter((field) => !settable.has(field));
-    if (refused.length > 0) throw new NotPermitted(`Your role can not change ${refused.join(', ')} of this leg. Nothing was saved.`);
+    const refused = [...Object.keys(changes), ...(afterLegIds ? ['afterLegIds'] : [])].filter(
+      (field) => !settable.has(field),
+    );
+    if (refused.length > 0)
+      throw new NotPermitted(`Your role can not change ${refused.join(', ')} of this leg. Nothing was saved.`);
     guardRevision(leg, revision, () => presentLeg(ctx.ability, leg));
     const days = { ...leg, ...changes };
     if (days.hopefulDays > days.likelyDays || days.likelyDays > days.badDays)
-      throw new InputInvalid([{ pointer: '/body/likelyDays', message: 'Hopeful can not be longer than likely, nor likely longer than bad' }]);
+      throw new InputInvalid([
+        { pointer: '/body/likelyDays', message: 'Hopeful can not be longer than likely, nor likely longer than bad' },
+      ]);
     if (changes.partyId) await requireParties(uow.manager, commissionId, [['/body/partyId', changes.partyId]]);
     if (changes.partId) await requireParts(uow.manager, commissionId, [['/body/partId', changes.partId]]);
     await uow.manager.update(Leg, { id: legId }, { ...changes, revision: leg.revision + 1 });
-    if (afterLegIds) await setLegOrder(uow.manager, legs, { id: legId, title: changes.title ?? leg.title }, afterLegIds);
+    if (afterLegIds)
+      await setLegOrder(uow.manager, legs, { id: legId, title: changes.title ?? leg.title }, afterLegIds);
     // A private note is the shop's own: it moves nothing and nobody else hears of it.
-    if (Object.keys(changes).some((field) => field !== 'privateNote') || afterLegIds) announceLegs(uow, ctx, commissionId, leg, `Changed the leg ${leg.title}`);
+    if (Object.keys(changes).some((field) => field !== 'privateNote') || afterLegIds)
+      announceLegs(uow, ctx, commissionId, leg, `Changed the leg ${leg.title}`);
     const saved = await loadLeg(uow.manager, commissionId, legId);
     if (!saved) throw new NotFound();
     return saved;

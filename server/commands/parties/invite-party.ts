@@ -14,15 +14,26 @@ const FOURTEEN_DAYS_MS = 14 * 24 * 60 * 60 * 1000;
 
 export const inviteParty = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<Invitation> =>
   inTransaction(ctx, async (uow) => {
-    const commission = await uow.manager.findOne(Commission, { where: { id: params.commissionId }, lock: { mode: 'pessimistic_write' } });
+    const commission = await uow.manager.findOne(Commission, {
+      where: { id: params.commissionId },
+      lock: { mode: 'pessimistic_write' },
+    });
     authorize(ctx.ability, 'invite', 'Commission', commission);
     await ctx.services.limits.take('invite', ctx.actor.accountId);
     if (body.kind === 'guest' && body.seesUntil < ctx.todayIso)
       throw new InputInvalid([{ pointer: '/body/seesUntil', message: 'Choose a day that is not past' }]);
     const waiting = await uow.manager.countBy(Invitation, {
-      commissionId: commission.id, email: body.email, acceptedAt: IsNull(), withdrawnAt: IsNull(), expiresAt: MoreThan(ctx.now),
+      commissionId: commission.id,
+      email: body.email,
+      acceptedAt: IsNull(),
+      withdrawnAt: IsNull(),
+      expiresAt: MoreThan(ctx.now),
     });
-    if (waiting > 0) throw new AppError('already-there', 'An invitation to this address is waiting. Take it back first to send another.');
+    if (waiting > 0)
+      throw new AppError(
+        'already-there',
+        'An invitation to this address is waiting. Take it back first to send another.',
+      );
     const token = randomBytes(32).toString('base64url');
     const roles: PartyRole[] = body.kind === 'shop' ? body.roles : [body.kind];
     const row = await uow.manager.save(
@@ -39,7 +50,18 @@ export const inviteParty = (ctx: RequestContext, { params, body }: ParsedInput<t
         expiresAt: new Date(ctx.now.getTime() + FOURTEEN_DAYS_MS),
       }),
     );
-    uow.mail({ letter: 'commission-invitation', to: body.email, invitedBy: ctx.person.displayName, commissionTitle: commission.title, roles, token });
-    uow.announce('parties.changed', { commissionId: commission.id }, { to: 'parties', commissionId: commission.id, partyIds: [] });
+    uow.mail({
+      letter: 'commission-invitation',
+      to: body.email,
+      invitedBy: ctx.person.displayName,
+      commissionTitle: commission.title,
+      roles,
+      token,
+    });
+    uow.announce(
+      'parties.changed',
+      { commissionId: commission.id },
+      { to: 'parties', commissionId: commission.id, partyIds: [] },
+    );
     return row;
   });

@@ -12,7 +12,11 @@ export const withdrawInvitation = (ctx: RequestContext, { params }: ParsedInput<
   inTransaction(ctx, async (uow) => {
     const { commissionId, invitationId } = params;
     authorize(ctx.ability, 'invite', 'Commission', await uow.manager.findOneBy(Commission, { id: commissionId }));
-    const taken = await uow.manager.update(Invitation, { id: invitationId, commissionId, acceptedAt: IsNull(), withdrawnAt: IsNull() }, { withdrawnAt: ctx.now });
+    const taken = await uow.manager.update(
+      Invitation,
+      { id: invitationId, commissionId, acceptedAt: IsNull(), withdrawnAt: IsNull() },
+      { withdrawnAt: ctx.now },
+    );
     if (taken.affected !== 1) throw new NotFound();
     uow.announce('parties.changed', { commissionId }, { to: 'parties', commissionId, partyIds: [] });
   });

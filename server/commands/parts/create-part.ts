@@ -12,8 +12,16 @@ export const createPart = (ctx: RequestContext, { params, body }: ParsedInput<ty
     authorizeCreate(ctx.ability, 'Part', { commissionId });
     await requireParties(uow.manager, commissionId, [['/body/holderPartyId', body.holderPartyId]]);
     const position = await uow.manager.countBy(Part, { commissionId });
-    const row = await uow.manager.save(uow.manager.create(Part, { ...body, commissionId, position, holderSince: ctx.todayIso }));
-    uow.record({ commissionId, accountId: ctx.actor.accountId, subject: 'part', subjectId: row.id, words: `Added the part ${row.name}` });
+    const row = await uow.manager.save(
+      uow.manager.create(Part, { ...body, commissionId, position, holderSince: ctx.todayIso }),
+    );
+    uow.record({
+      commissionId,
+      accountId: ctx.actor.accountId,
+      subject: 'part',
+      subjectId: row.id,
+      words: `Added the part ${row.name}`,
+    });
     uow.announce('parts.changed', { commissionId }, { to: 'everyone', commissionId });
     uow.announce('standing.changed', { commissionId }, { to: 'everyone', commissionId });
     return row;

@@ -11,17 +11,24 @@ import { given, guardRevision } from '../revision.ts';
 export const updatePart = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<Part> =>
   inTransaction(ctx, async (uow) => {
     const { commissionId, partId } = params;
-    const row = await uow.manager.findOne(Part, { where: { id: partId, commissionId }, lock: { mode: 'pessimistic_write' } });
+    const row = await uow.manager.findOne(Part, {
+      where: { id: partId, commissionId },
+      lock: { mode: 'pessimistic_write' },
+    });
     authorize(ctx.ability, 'update', 'Part', row);
     const { revision, ...changes } = body;
     guardRevision(row, revision, () => presentPart(row));
     const moves = changes.holderPartyId !== undefined && changes.holderPartyId !== row.holderPartyId;
-    if (changes.holderPartyId) await requireParties(uow.manager, commissionId, [['/body/holderPartyId', changes.holderPartyId]]);
+    if (changes.holderPartyId)
+      await requireParties(uow.manager, commissionId, [['/body/holderPartyId', changes.holderPartyId]]);
     Object.assign(row, given(changes), { revision: row.revision + 1 }, moves ? { holderSince: ctx.todayIso } : {});
     await uow.manager.save(row);
     const holder = moves ? (await partyNames(uow.manager, commissionId)).get(row.holderPartyId) : null;
     uow.record({
-      commissionId, accountId: ctx.actor.accountId, subject: 'part', subjectId: row.id,
+      commissionId,
+      accountId: ctx.actor.accountId,
+      subject: 'part',
+      subjectId: row.id,
       words: holder ? `Corrected the holder of ${row.name} to ${holder}` : `Changed the part ${row.name}`,
     });
     uow.announce('parts.changed', { commissionId }, { to: 'everyone', commissionId });

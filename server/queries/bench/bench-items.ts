@@ -27,8 +27,17 @@ export function waitsOf(facts: BenchFacts): Wait[] {
       partyId,
       concerns,
       item: {
-        commissionId, commissionTitle: piece.title, commissionCode: showCode(piece.code), coverFileId: piece.coverFileId,
-        refRevision: null, offerId: null, noteId: null, day: null, holdsUp: 0, whoName: names.get(partyId) ?? null, ...core,
+        commissionId,
+        commissionTitle: piece.title,
+        commissionCode: showCode(piece.code),
+        coverFileId: piece.coverFileId,
+        refRevision: null,
+        offerId: null,
+        noteId: null,
+        day: null,
+        holdsUp: 0,
+        whoName: names.get(partyId) ?? null,
+        ...core,
       },
     });
   };
@@ -36,16 +45,32 @@ export function waitsOf(facts: BenchFacts): Wait[] {
   for (const report of facts.reports) {
     const both = [report.raisedByPartyId, report.answerPartyId];
     const holdsUp = report.heldLegId ? 1 + (legsWaiting.get(report.heldLegId) ?? 0) : 0;
-    const common = { refId: report.id, refRevision: report.revision, noteId: report.noteId, day: report.raisedOn, holdsUp };
+    const common = {
+      refId: report.id,
+      refRevision: report.revision,
+      noteId: report.noteId,
+      day: report.raisedOn,
+      holdsUp,
+    };
     const step = REPORT_WAIT[report.state];
     if (!step) continue;
     if (report.state === 'agreed' && report.shows && report.consentState === 'asked') {
-      const client = facts.parties.find((party) => party.commissionId === report.commissionId && party.roles.includes('client'));
-      if (client) add(report.commissionId, client.id, both, { ...common, kind: 'consent', refId: report.noteId ?? report.id, words: 'Your consent to a correction that will show' });
+      const client = facts.parties.find(
+        (party) => party.commissionId === report.commissionId && party.roles.includes('client'),
+      );
+      if (client)
+        add(report.commissionId, client.id, both, {
+          ...common,
+          kind: 'consent',
+          refId: report.noteId ?? report.id,
+          words: 'Your consent to a correction that will show',
+        });
       continue;
     }
     add(report.commissionId, step.side === 'raiser' ? report.raisedByPartyId : report.answerPartyId, both, {
-      ...common, kind: step.kind, words: `${step.words}: ${report.title}`,
+      ...common,
+      kind: step.kind,
+      words: `${step.words}: ${report.title}`,
     });
   }
   for (const handoff of facts.handoffs) {
@@ -53,23 +78,45 @@ export function waitsOf(facts: BenchFacts): Wait[] {
     const common = { refId: handoff.id, refRevision: handoff.revision, offerId: handoff.offerId, holdsUp: 0 };
     if (handoff.offerId && handoff.offerByPartyId) {
       const other = handoff.offerByPartyId === handoff.fromPartyId ? handoff.toPartyId : handoff.fromPartyId;
-      add(handoff.commissionId, other, both, { ...common, kind: 'answer-offer', day: handoff.offerOn, words: `${names.get(handoff.offerByPartyId)} offers a day for ${handoff.partNames}` });
+      add(handoff.commissionId, other, both, {
+        ...common,
+        kind: 'answer-offer',
+        day: handoff.offerOn,
+        words: `${names.get(handoff.offerByPartyId)} offers a day for ${handoff.partNames}`,
+      });
     } else if (!handoff.agreedOn) {
-      add(handoff.commissionId, handoff.fromPartyId, both, { ...common, kind: 'offer-day', words: `No day is agreed for ${handoff.partNames} to ${names.get(handoff.toPartyId)}` });
+      add(handoff.commissionId, handoff.fromPartyId, both, {
+        ...common,
+        kind: 'offer-day',
+        words: `No day is agreed for ${handoff.partNames} to ${names.get(handoff.toPartyId)}`,
+      });
     } else if (handoff.holderReady) {
-      add(handoff.commissionId, handoff.toPartyId, both, { ...common, kind: 'receive-parts', day: handoff.agreedOn, words: `${handoff.partNames} from ${names.get(handoff.fromPartyId)}` });
+      add(handoff.commissionId, handoff.toPartyId, both, {
+        ...common,
+        kind: 'receive-parts',
+        day: handoff.agreedOn,
+        words: `${handoff.partNames} from ${names.get(handoff.fromPartyId)}`,
+      });
     }
   }
   for (const leg of facts.legs) {
     const common = { refId: leg.id, refRevision: leg.revision, holdsUp: leg.waiting };
-    if (leg.state === 'under-way' && !leg.heldSince) add(leg.commissionId, leg.partyId, [leg.partyId], { ...common, kind: 'finish-leg', words: leg.title });
+    if (leg.state === 'under-way' && !leg.heldSince)
+      add(leg.commissionId, leg.partyId, [leg.partyId], { ...common, kind: 'finish-leg', words: leg.title });
     if (leg.state === 'planned' && leg.openBefore === 0)
-      add(leg.commissionId, leg.partyId, [leg.partyId], { ...common, kind: 'start-leg', day: leg.plannedStartOn, words: leg.title });
+      add(leg.commissionId, leg.partyId, [leg.partyId], {
+        ...common,
+        kind: 'start-leg',
+        day: leg.plannedStartOn,
+        words: leg.title,
+      });
   }
   return made;
 }
 
-const REPORT_WAIT: Partial<Record<string, { side: 'raiser' | 'answerer'; kind: BenchItemView['kind']; words: string }>> = {
+const REPORT_WAIT: Partial<
+  Record<string, { side: 'raiser' | 'answerer'; kind: BenchItemView['kind']; words: string }>
+> = {
   raised: { side: 'answerer', kind: 'answer-report', words: 'Answer' },
   answered: { side: 'raiser', kind: 'agree-rework', words: 'Agree or ask again' },
   agreed: { side: 'answerer', kind: 'start-rework', words: 'Begin the rework' },
@@ -79,4 +126,6 @@ const REPORT_WAIT: Partial<Record<string, { side: 'raiser' | 'answerer'; kind: B
 
 /** The most held-up work first, then the earliest day, then a fixed order. */
 export const byUrgency = (one: BenchItemView, other: BenchItemView): number =>
-  other.holdsUp - one.holdsUp || (one.day ?? '9999').localeCompare(other.day ?? '9999') || one.refId.localeCompare(other.refId);
+  other.holdsUp - one.holdsUp ||
+  (one.day ?? '9999').localeCompare(other.day ?? '9999') ||
+  one.refId.localeCompare(other.refId);

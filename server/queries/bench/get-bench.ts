@@ -11,34 +11,55 @@ const THIRTY_DAYS_MS = 30 * 24 * 60 * 60 * 1000;
 /** What waits on a person's hands over all their open commissions; bookkeepers' and guests' parts give no work. */
 export async function getBench(ctx: RequestContext): Promise<RouteOutput<typeof contract>> {
   const known = await loadActor(ctx.manager, ctx.actor.accountId, { everyOpenCommission: true });
-  const working = (known?.actor.memberships ?? []).filter((one) => one.shopRole !== 'bookkeeper' && !one.roles.includes('guest'));
+  const working = (known?.actor.memberships ?? []).filter(
+    (one) => one.shopRole !== 'bookkeeper' && !one.roles.includes('guest'),
+  );
   const mine = new Set(working.map((one) => one.partyId));
   const leading = new Set(working.filter((one) => one.roles.includes('lead')).map((one) => one.commissionId));
   const commissionIds = [...new Set(working.map((one) => one.commissionId))];
-  const [{ bench_seen_at: seenAt } = { bench_seen_at: null }] = await ctx.manager.query<{ bench_seen_at: Date | null }[]>(
-    'SELECT "bench_seen_at" FROM "account" WHERE "id" = $1',
-    [ctx.actor.accountId],
-  );
+  const [{ bench_seen_at: seenAt } = { bench_seen_at: null }] = await ctx.manager.query<
+    { bench_seen_at: Date | null }[]
+  >('SELECT "bench_seen_at" FROM "account" WHERE "id" = $1', [ctx.actor.accountId]);
   const facts = await loadBenchFacts(ctx.manager, ctx.actor.accountId, commissionIds);
   const waits = waitsOf(facts);
   const onMe = waits.filter((wait) => mine.has(wait.partyId)).map((wait) => wait.item);
   const onOthers = waits
-    .filter((wait) => !mine.has(wait.partyId) && (wait.concerns.some((id) => mine.has(id)) || leading.has(wait.item.commissionId)))
+    .filter(
+      (wait) =>
+        !mine.has(wait.partyId) && (wait.concerns.some((id) => mine.has(id)) || leading.has(wait.item.commissionId)),
+    )
     .map((wait) => wait.item);
   const mentions = facts.mentions.flatMap<BenchItemView>((mention) => {
     const piece = facts.commissions.find((one) => one.id === mention.commissionId);
     return piece
-      ? [{
-          kind: 'read-mention', commissionId: piece.id, commissionTitle: piece.title, commissionCode: showCode(piece.code), coverFileId: piece.coverFileId,
-          refId: mention.threadId, refRevision: null, offerId: null, noteId: null, words: `You are named in ${mention.title}`, day: null, holdsUp: 0, whoName: null,
-        }]
+      ? [
+          {
+            kind: 'read-mention',
+            commissionId: piece.id,
+            commissionTitle: piece.title,
+            commissionCode: showCode(piece.code),
+            coverFileId: piece.coverFileId,
+            refId: mention.threadId,
+            refRevision: null,
+            offerId: null,
+            noteId: null,
+            words: `You are named in ${mention.title}`,
+            day: null,
+            holdsUp: 0,
+            whoName: null,
+          },
+        ]
       : [];
   });
   const unread = await countUnreadThreads(ctx, commissionIds, [...mine]);
   return {
     waitsOnYou: [...onMe, ...mentions].sort(byUrgency),
     youWaitOn: onOthers.sort(byUrgency),
-    moved: await loadMoved(ctx.manager, [...mine], { since: seenAt ?? new Date(ctx.now.getTime() - THIRTY_DAYS_MS), notBy: ctx.actor.accountId, limit: 40 }),
+    moved: await loadMoved(ctx.manager, [...mine], {
+      since: seenAt ?? new Date(ctx.now.getTime() - THIRTY_DAYS_MS),
+      notBy: ctx.actor.accountId,
+      limit: 40,
+    }),
     lastHereAt: seenAt?.toISOString() ?? null,
     unreadThreads: unread,
     roles: [...new Set(working.flatMap((one) => one.roles))],

@@ -1,6 +1,12 @@
 import type { EntityManager } from 'typeorm';
 import type { MovedView } from '../../../shared/contracts/standing.ts';
-import { OPEN_REPORT_STATES, type CommissionState, type LegState, type PartyRole, type ReportState } from '../../../shared/contracts/vocabulary.ts';
+import {
+  OPEN_REPORT_STATES,
+  type CommissionState,
+  type LegState,
+  type PartyRole,
+  type ReportState,
+} from '../../../shared/contracts/vocabulary.ts';
 
 const OPEN = OPEN_REPORT_STATES.map((state) => `'${state}'`).join(', ');
 
@@ -8,13 +14,53 @@ const OPEN = OPEN_REPORT_STATES.map((state) => `'${state}'`).join(', ');
 export interface BenchFacts {
   commissions: { id: string; title: string; code: string; coverFileId: string | null; state: CommissionState }[];
   parties: { id: string; commissionId: string; name: string; roles: PartyRole[] }[];
-  legs: { id: string; commissionId: string; partyId: string; title: string; state: LegState; plannedStartOn: string | null; revision: number; openBefore: number; heldSince: string | null; waiting: number }[];
-  reports: { id: string; commissionId: string; title: string; state: ReportState; raisedByPartyId: string; answerPartyId: string; revision: number; heldLegId: string | null; noteId: string | null; shows: boolean | null; consentState: string | null; raisedOn: string }[];
-  handoffs: { id: string; commissionId: string; fromPartyId: string; toPartyId: string; agreedOn: string | null; revision: number; partNames: string; offerId: string | null; offerByPartyId: string | null; offerOn: string | null; holderReady: boolean }[];
+  legs: {
+    id: string;
+    commissionId: string;
+    partyId: string;
+    title: string;
+    state: LegState;
+    plannedStartOn: string | null;
+    revision: number;
+    openBefore: number;
+    heldSince: string | null;
+    waiting: number;
+  }[];
+  reports: {
+    id: string;
+    commissionId: string;
+    title: string;
+    state: ReportState;
+    raisedByPartyId: string;
+    answerPartyId: string;
+    revision: number;
+    heldLegId: string | null;
+    noteId: string | null;
+    shows: boolean | null;
+    consentState: string | null;
+    raisedOn: string;
+  }[];
+  handoffs: {
+    id: string;
+    commissionId: string;
+    fromPartyId: string;
+    toPartyId: string;
+    agreedOn: string | null;
+    revision: number;
+    partNames: string;
+    offerId: string | null;
+    offerByPartyId: string | null;
+    offerOn: string | null;
+    holderReady: boolean;
+  }[];
   mentions: { threadId: string; commissionId: string; title: string; count: number }[];
 }
 
-export async function loadBenchFacts(manager: EntityManager, accountId: string, commissionIds: string[]): Promise<BenchFacts> {
+export async function loadBenchFacts(
+  manager: EntityManager,
+  accountId: string,
+  commissionIds: string[],
+): Promise<BenchFacts> {
   const ask = <T>(sql: string, params: unknown[] = [commissionIds]): Promise<T[]> => manager.query<T[]>(sql, params);
   const [commissions, parties, legs, reports, handoffs, mentions] = await Promise.all([
     ask<BenchFacts['commissions'][number]>(
@@ -90,10 +136,23 @@ export async function loadMoved(
        AND ($2::uuid IS NULL OR h."commission_id" = $2) AND ($3::bigint IS NULL OR h."id" < $3)
        AND ($4::timestamptz IS NULL OR h."at" > $4) AND ($5::uuid IS NULL OR h."account_id" IS DISTINCT FROM $5)
      ORDER BY h."id" DESC LIMIT $6`,
-    [partyIds, options.commissionId ?? null, options.before ?? null, options.since ?? null, options.notBy ?? null, options.limit],
+    [
+      partyIds,
+      options.commissionId ?? null,
+      options.before ?? null,
+      options.since ?? null,
+      options.notBy ?? null,
+      options.limit,
+    ],
   );
   return rows.map((row) => ({
-    id: row.id, commissionId: row.commission_id, commissionTitle: row.title, words: row.words, by: row.by ?? 'Ferrule', at: row.at.toISOString(),
-    subject: row.subject, subjectId: row.subject_id,
+    id: row.id,
+    commissionId: row.commission_id,
+    commissionTitle: row.title,
+    words: row.words,
+    by: row.by ?? 'Ferrule',
+    at: row.at.toISOString(),
+    subject: row.subject,
+    subjectId: row.subject_id,
   }));
 }

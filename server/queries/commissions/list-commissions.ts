@@ -28,7 +28,10 @@ interface Row {
 const OPEN = OPEN_REPORT_STATES.map((state) => `'${state}'`).join(', ');
 
 /** The statement of one page; also what the bench puts behind its bare handler. */
-export function listStatement(ctx: Pick<RequestContext, 'ability' | 'actor'>, query: ParsedInput<typeof contract>['query']): QueryConfig {
+export function listStatement(
+  ctx: Pick<RequestContext, 'ability' | 'actor'>,
+  query: ParsedInput<typeof contract>['query'],
+): QueryConfig {
   const sight = abilityToSql(ctx.ability, 'read', 'Commission', 'c', 3);
   const values: unknown[] = [query.limit + 1, memberKeysOf(ctx.actor), ...sight.params];
   const bind = (value: unknown): string => `$${values.push(value)}`;
@@ -36,8 +39,15 @@ export function listStatement(ctx: Pick<RequestContext, 'ability' | 'actor'>, qu
   if (query.state) where.push(`c."state" = ${bind(query.state)}`);
   if (query.search) {
     const pattern = bind(`%${query.search.replace(/[\\%_]/g, (sign) => `\\${sign}`)}%`);
-    const code = bind(`${query.search.replaceAll(' ', '').toUpperCase().replace(/[\\%_]/g, '')}%`);
-    where.push(`(c."title" ILIKE ${pattern} OR c."client_name" ILIKE ${pattern} OR c."lead_name" ILIKE ${pattern} OR c."code" LIKE ${code})`);
+    const code = bind(
+      `${query.search
+        .replaceAll(' ', '')
+        .toUpperCase()
+        .replace(/[\\%_]/g, '')}%`,
+    );
+    where.push(
+      `(c."title" ILIKE ${pattern} OR c."client_name" ILIKE ${pattern} OR c."lead_name" ILIKE ${pattern} OR c."code" LIKE ${code})`,
+    );
   }
   if (query.cursor) {
     const [instant, id] = decodeCursor(query.cursor, 2);

@@ -21,7 +21,11 @@ interface Row {
  * What the client is asked, and what they answered. The maker's own words on the method stay with the makers; the client
  * reads the lead's words, or a plain default, and where it will show.
  */
-export async function loadConsents(manager: EntityManager, commissionId: string, noteId: string | null = null): Promise<ConsentView[]> {
+export async function loadConsents(
+  manager: EntityManager,
+  commissionId: string,
+  noteId: string | null = null,
+): Promise<ConsentView[]> {
   const rows = await manager.query<Row[]>(
     `SELECT n."id" AS note_id, n."report_id", c."title" AS piece_title, COALESCE(s."name", '') AS asked_by, n."consent_asked_at",
        n."where_it_shows", f."client_words", n."consent_state", n."consent_answered_at", n."consent_words",

@@ -18,9 +18,20 @@ const reportsSql = (where: string): string => `
   WHERE f."commission_id" = $1 AND ${where} ORDER BY f."raised_at" DESC, f."id"`;
 
 const presentReport = (row: ReportRow): FitReportView => ({
-  id: row.id, jointId: row.jointId, title: row.title, plainWords: row.plainWords, state: row.state, blocking: row.blocking,
-  heldLegId: row.heldLegId, raisedByPartyId: row.raisedByPartyId, raisedByName: row.raisedByName, answerPartyId: row.answerPartyId,
-  raisedAt: row.raisedAt.toISOString(), reopenedCount: row.reopenedCount, clientWords: row.clientWords, revision: row.revision,
+  id: row.id,
+  jointId: row.jointId,
+  title: row.title,
+  plainWords: row.plainWords,
+  state: row.state,
+  blocking: row.blocking,
+  heldLegId: row.heldLegId,
+  raisedByPartyId: row.raisedByPartyId,
+  raisedByName: row.raisedByName,
+  answerPartyId: row.answerPartyId,
+  raisedAt: row.raisedAt.toISOString(),
+  reopenedCount: row.reopenedCount,
+  clientWords: row.clientWords,
+  revision: row.revision,
 });
 
 /** Reports the reader raised or answers; the lead's sight is all of them. */
@@ -33,7 +44,11 @@ export async function loadVisibleReports(
   const sight = abilityToSql(ability, 'read', 'FitReport', 'f', 3);
   const states = `(f."state" = ANY($2)) = ${open === 'no' ? 'FALSE' : 'TRUE'}`;
   const where = `${sight.sql} AND (${open === undefined ? '$2::text[] IS NOT NULL' : states})`;
-  const rows = await manager.query<ReportRow[]>(reportsSql(where), [commissionId, [...OPEN_REPORT_STATES], ...sight.params]);
+  const rows = await manager.query<ReportRow[]>(reportsSql(where), [
+    commissionId,
+    [...OPEN_REPORT_STATES],
+    ...sight.params,
+  ]);
   return rows.map(presentReport);
 }
 
@@ -41,17 +56,35 @@ type NoteRow = ReworkNote & { authorName: string };
 type EventRow = ReportEvent & { by: string };
 
 const presentNote = (row: NoteRow): ReworkNoteView => ({
-  id: row.id, partyId: row.partyId, authorName: row.authorName, at: row.createdAt.toISOString(), state: row.state,
-  method: row.method, cutSide: row.cutSide, removeOnDiameterUm: row.removeOnDiameterUm, overLengthMm: row.overLengthMm,
-  risk: row.risk, shows: row.shows, whereItShows: row.whereItShows, costMinor: row.costMinor, currency: row.currency,
-  costBorneByPartyId: row.costBorneByPartyId, effectDays: row.effectDays,
+  id: row.id,
+  partyId: row.partyId,
+  authorName: row.authorName,
+  at: row.createdAt.toISOString(),
+  state: row.state,
+  method: row.method,
+  cutSide: row.cutSide,
+  removeOnDiameterUm: row.removeOnDiameterUm,
+  overLengthMm: row.overLengthMm,
+  risk: row.risk,
+  shows: row.shows,
+  whereItShows: row.whereItShows,
+  costMinor: row.costMinor,
+  currency: row.currency,
+  costBorneByPartyId: row.costBorneByPartyId,
+  effectDays: row.effectDays,
   consent: row.consentState && {
-    state: row.consentState, at: (row.consentAnsweredAt ?? row.consentAskedAt)?.toISOString() ?? null, words: row.consentWords,
+    state: row.consentState,
+    at: (row.consentAnsweredAt ?? row.consentAskedAt)?.toISOString() ?? null,
+    words: row.consentWords,
   },
 });
 
 /** One report whole: its notes, newest last, and its history. The caller has authorized reading it. */
-export async function loadReportDetail(manager: EntityManager, commissionId: string, reportId: string): Promise<FitReportDetail> {
+export async function loadReportDetail(
+  manager: EntityManager,
+  commissionId: string,
+  reportId: string,
+): Promise<FitReportDetail> {
   const [[report], notes, events] = await Promise.all([
     manager.query<ReportRow[]>(reportsSql('f."id" = $2'), [commissionId, reportId]),
     manager.query<NoteRow[]>(
@@ -73,6 +106,14 @@ export async function loadReportDetail(manager: EntityManager, commissionId: str
   return {
     report: presentReport(report),
     notes: notes.map(presentNote),
-    events: events.map((row) => ({ id: row.id, act: row.act, fromState: row.fromState, toState: row.toState, by: row.by, at: row.at.toISOString(), words: row.words })),
+    events: events.map((row) => ({
+      id: row.id,
+      act: row.act,
+      fromState: row.fromState,
+      toState: row.toState,
+      by: row.by,
+      at: row.at.toISOString(),
+      words: row.words,
+    })),
   };
 }

@@ -34,7 +34,11 @@ const handoffsSql = (where: string): string => `
   FROM "handoff" h WHERE h."commission_id" = $1 AND ${where}
   ORDER BY h."done_on" NULLS LAST, h."agreed_on" NULLS LAST, h."id"`;
 
-export function loadVisibleHandoffs(manager: EntityManager, ability: AppAbility, commissionId: string): Promise<HandoffRecord[]> {
+export function loadVisibleHandoffs(
+  manager: EntityManager,
+  ability: AppAbility,
+  commissionId: string,
+): Promise<HandoffRecord[]> {
   const sight = abilityToSql(ability, 'read', 'Handoff', 'h', 2);
   return manager.query<HandoffRecord[]>(handoffsSql(sight.sql), [commissionId, ...sight.params]);
 }
@@ -43,7 +47,11 @@ export function loadVisibleHandoffs(manager: EntityManager, ability: AppAbility,
 export const loadAllHandoffs = (manager: EntityManager, commissionId: string): Promise<HandoffRecord[]> =>
   manager.query<HandoffRecord[]>(handoffsSql('TRUE'), [commissionId]);
 
-export async function loadHandoff(manager: EntityManager, commissionId: string, handoffId: string): Promise<HandoffRecord | null> {
+export async function loadHandoff(
+  manager: EntityManager,
+  commissionId: string,
+  handoffId: string,
+): Promise<HandoffRecord | null> {
   const [row] = await manager.query<HandoffRecord[]>(handoffsSql('h."id" = $2'), [commissionId, handoffId]);
   return row ?? null;
 }

@@ -9,10 +9,21 @@ import { planInputOf } from '../standing/load-facts.ts';
 import { loadAllHandoffs } from './load-handoffs.ts';
 
 /** What a day would do to the client's date. Told to those who agree the day, before they do. */
-export async function previewHandoffDay(ctx: RequestContext, { params, query }: ParsedInput<typeof contract>): Promise<DayEffectView> {
+export async function previewHandoffDay(
+  ctx: RequestContext,
+  { params, query }: ParsedInput<typeof contract>,
+): Promise<DayEffectView> {
   const { commissionId, handoffId } = params;
-  const [legs, handoffs] = [await loadAllLegs(ctx.manager, commissionId), await loadAllHandoffs(ctx.manager, commissionId)];
-  authorize(ctx.ability, 'offer', 'Handoff', handoffs.find((one) => one.id === handoffId));
+  const [legs, handoffs] = [
+    await loadAllLegs(ctx.manager, commissionId),
+    await loadAllHandoffs(ctx.manager, commissionId),
+  ];
+  authorize(
+    ctx.ability,
+    'offer',
+    'Handoff',
+    handoffs.find((one) => one.id === handoffId),
+  );
   const input = planInputOf(legs, handoffs, ctx.todayIso);
   const before = planOf(input).expected;
   const after = planWithDay(input, handoffId, query.onDay).expected;
@@ -21,7 +32,7 @@ export async function previewHandoffDay(ctx: RequestContext, { params, query }: 
 }
 
 function effectWords(before: DayEffectView['before'], after: DayEffectView['after'], movedDays: number | null): string {
-  if (!before || !after || movedDays === null) return 'No plan can be computed yet, so the client\'s date is not known.';
+  if (!before || !after || movedDays === null) return "No plan can be computed yet, so the client's date is not known.";
   const range = dayRange(after.fromDay, after.toDay);
   if (movedDays === 0) return `Keeps the client's date: likely ${range}.`;
   const size = Math.abs(movedDays);

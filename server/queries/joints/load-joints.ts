@@ -20,12 +20,20 @@ const jointsSql = (where: string): string => `
   FROM "joint" j WHERE j."commission_id" = $1 AND ${where} ORDER BY j."name", j."id"`;
 
 /** Joints the reader answers for; the lead's sight is all of them. */
-export function loadVisibleJoints(manager: EntityManager, ability: AppAbility, commissionId: string): Promise<JointRecord[]> {
+export function loadVisibleJoints(
+  manager: EntityManager,
+  ability: AppAbility,
+  commissionId: string,
+): Promise<JointRecord[]> {
   const sight = abilityToSql(ability, 'read', 'Joint', 'j', 2);
   return manager.query<JointRecord[]>(jointsSql(sight.sql), [commissionId, ...sight.params]);
 }
 
-export async function loadJoint(manager: EntityManager, commissionId: string, jointId: string): Promise<JointRecord | null> {
+export async function loadJoint(
+  manager: EntityManager,
+  commissionId: string,
+  jointId: string,
+): Promise<JointRecord | null> {
   const [row] = await manager.query<JointRecord[]>(jointsSql('j."id" = $2'), [commissionId, jointId]);
   return row ?? null;
 }

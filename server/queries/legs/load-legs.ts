@@ -40,13 +40,18 @@ const legsSql = (sight: string): string => `
   FROM "leg" l WHERE l."commission_id" = $1 AND ${sight} ORDER BY l."position", l."id"`;
 
 /** Legs the reader may see. */
-export function loadVisibleLegs(manager: EntityManager, ability: AppAbility, commissionId: string): Promise<LegRecord[]> {
+export function loadVisibleLegs(
+  manager: EntityManager,
+  ability: AppAbility,
+  commissionId: string,
+): Promise<LegRecord[]> {
   const sight = abilityToSql(ability, 'read', 'Leg', 'l', 2);
   return manager.query<LegRecord[]>(legsSql(sight.sql), [commissionId, ...sight.params]);
 }
 
 /** Every leg, for computing; what comes of it is shown only through a presenter or the merged status. */
-export const loadAllLegs = (manager: EntityManager, commissionId: string): Promise<LegRecord[]> => manager.query<LegRecord[]>(legsSql('TRUE'), [commissionId]);
+export const loadAllLegs = (manager: EntityManager, commissionId: string): Promise<LegRecord[]> =>
+  manager.query<LegRecord[]>(legsSql('TRUE'), [commissionId]);
 
 export async function loadLeg(manager: EntityManager, commissionId: string, legId: string): Promise<LegRecord | null> {
   return (await loadAllLegs(manager, commissionId)).find((leg) => leg.id === legId) ?? null;

@@ -33,22 +33,38 @@ const INVITATIONS_SQL = `
   SELECT "id", "email", "roles", "created_at", "expires_at" FROM "invitation"
   WHERE "commission_id" = $1 AND "accepted_at" IS NULL AND "withdrawn_at" IS NULL AND "expires_at" > now() ORDER BY "created_at", "id"`;
 
-export async function listParties(ctx: RequestContext, { params }: ParsedInput<typeof contract>): Promise<RouteOutput<typeof contract>> {
+export async function listParties(
+  ctx: RequestContext,
+  { params }: ParsedInput<typeof contract>,
+): Promise<RouteOutput<typeof contract>> {
   const { commissionId } = params;
   authorizeCommissionSight(ctx.ability, commissionId);
   if (!mayDo(ctx.ability, 'read', 'Party', { commissionId, roles: [] })) throw new NotPermitted();
   const rows = await ctx.manager.query<PartyRow[]>(PARTIES_SQL, [commissionId]);
   const mayInvite = mayDo(ctx.ability, 'invite', 'Commission', { id: commissionId, memberKeys: [] });
   const invitations = mayInvite
-    ? await ctx.manager.query<{ id: string; email: string; roles: PartyRole[]; created_at: Date; expires_at: Date }[]>(INVITATIONS_SQL, [commissionId])
+    ? await ctx.manager.query<{ id: string; email: string; roles: PartyRole[]; created_at: Date; expires_at: Date }[]>(
+        INVITATIONS_SQL,
+        [commissionId],
+      )
     : [];
   return {
     parties: rows.map((row) => ({
-      id: row.id, roles: row.roles, displayName: row.display_name, shopId: row.shop_id, tint: row.tint,
-      people: row.people, seesUntil: row.sees_until, joinedAt: row.joined_at.toISOString(),
+      id: row.id,
+      roles: row.roles,
+      displayName: row.display_name,
+      shopId: row.shop_id,
+      tint: row.tint,
+      people: row.people,
+      seesUntil: row.sees_until,
+      joinedAt: row.joined_at.toISOString(),
     })),
     invitations: invitations.map((row) => ({
-      id: row.id, email: row.email, roles: row.roles, invitedAt: row.created_at.toISOString(), expiresAt: row.expires_at.toISOString(),
+      id: row.id,
+      email: row.email,
+      roles: row.roles,
+      invitedAt: row.created_at.toISOString(),
+      expiresAt: row.expires_at.toISOString(),
     })),
   };
 }

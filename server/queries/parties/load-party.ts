@@ -3,11 +3,17 @@ import { Party } from '../../entities/party.ts';
 import { InputInvalid } from '../../errors.ts';
 
 /** Checks that named parties take part in the commission now; `pointer` names the field when one does not. */
-export async function requireParties(manager: EntityManager, commissionId: string, wanted: readonly [pointer: string, partyId: string][]): Promise<Map<string, Party>> {
+export async function requireParties(
+  manager: EntityManager,
+  commissionId: string,
+  wanted: readonly [pointer: string, partyId: string][],
+): Promise<Map<string, Party>> {
   const ids = [...new Set(wanted.map(([, partyId]) => partyId))];
   const rows = await manager.findBy(Party, { commissionId, id: In(ids), leftAt: IsNull() });
   const byId = new Map(rows.map((row) => [row.id, row]));
-  const errors = wanted.filter(([, partyId]) => !byId.has(partyId)).map(([pointer]) => ({ pointer, message: 'This party does not take part in the commission' }));
+  const errors = wanted
+    .filter(([, partyId]) => !byId.has(partyId))
+    .map(([pointer]) => ({ pointer, message: 'This party does not take part in the commission' }));
   if (errors.length > 0) throw new InputInvalid(errors);
   return byId;
 }

@@ -10,7 +10,11 @@ import { loadAllHandoffs, type HandoffRecord } from '../handoffs/load-handoffs.t
 import { loadAllLegs, type LegRecord } from '../legs/load-legs.ts';
 
 /** The commission's legs and handoffs as the plan engine takes them. */
-export const planInputOf = (legs: readonly LegRecord[], handoffs: readonly HandoffRecord[], todayIso: IsoDay): PlanInput => ({
+export const planInputOf = (
+  legs: readonly LegRecord[],
+  handoffs: readonly HandoffRecord[],
+  todayIso: IsoDay,
+): PlanInput => ({
   legs: legs.map((leg) => ({ ...leg, heldSince: leg.heldBy?.sinceDay ?? null })),
   handoffs,
   todayIso,
@@ -49,7 +53,11 @@ export interface LoadedFacts {
 }
 
 /** Everything the merged status is computed from. Messages are not read: no status depends on them. */
-export async function loadCommissionFacts(manager: EntityManager, commission: Commission, todayIso: IsoDay): Promise<LoadedFacts> {
+export async function loadCommissionFacts(
+  manager: EntityManager,
+  commission: Commission,
+  todayIso: IsoDay,
+): Promise<LoadedFacts> {
   const { id } = commission;
   const [legs, handoffs, parties, parts, reports] = await Promise.all([
     loadAllLegs(manager, id),
@@ -69,7 +77,10 @@ export async function loadCommissionFacts(manager: EntityManager, commission: Co
     brief: commission.brief,
     budgetMinor: commission.budgetMinor,
     deliveredOn: commission.deliveredOn,
-    told: commission.toldFromDay && commission.toldToDay ? { fromDay: commission.toldFromDay, toDay: commission.toldToDay } : null,
+    told:
+      commission.toldFromDay && commission.toldToDay
+        ? { fromDay: commission.toldFromDay, toDay: commission.toldToDay }
+        : null,
     expected: plan.expected,
     parties,
     parts,
@@ -83,7 +94,14 @@ export async function loadCommissionFacts(manager: EntityManager, commission: Co
       const standing = handoff.offers.find((offer) => offer.state === 'standing');
       return {
         ...handoff,
-        standingOffer: standing ? { byPartyId: standing.byPartyId, onDay: standing.onDay, words: standing.words, offeredOn: standing.at.slice(0, 10) } : null,
+        standingOffer: standing
+          ? {
+              byPartyId: standing.byPartyId,
+              onDay: standing.onDay,
+              words: standing.words,
+              offeredOn: standing.at.slice(0, 10),
+            }
+          : null,
       };
     }),
     threads: [],
@@ -91,5 +109,8 @@ export async function loadCommissionFacts(manager: EntityManager, commission: Co
   return { all, plan, planInput };
 }
 
-export const loadClientFacts = async (manager: EntityManager, commission: Commission, todayIso: IsoDay): Promise<ClientFacts> =>
-  clientFactsFrom((await loadCommissionFacts(manager, commission, todayIso)).all);
+export const loadClientFacts = async (
+  manager: EntityManager,
+  commission: Commission,
+  todayIso: IsoDay,
+): Promise<ClientFacts> => clientFactsFrom((await loadCommissionFacts(manager, commission, todayIso)).all);

@@ -20,7 +20,8 @@ export function encodeBase32(value: bigint, length: number): string {
 }
 
 /** Upper case, without the hyphens and spaces people put in, and with the look-alikes I, L and O read as digits. */
-const normalise = (text: string): string => text.toUpperCase().replace(/[\s-]/g, '').replace(/[IL]/g, '1').replace(/O/g, '0');
+const normalise = (text: string): string =>
+  text.toUpperCase().replace(/[\s-]/g, '').replace(/[IL]/g, '1').replace(/O/g, '0');
 
 const decodeBase32 = (text: string): bigint | null => {
   let value = 0n;
@@ -43,10 +44,13 @@ export type CodeReading = { ok: true; code: string } | { ok: false; words: strin
 /** Reads a typed or scanned code leniently and says what is wrong with one that does not hold. */
 export function readCode(typed: string): CodeReading {
   const text = normalise(typed);
-  if (text.length !== CODE_SYMBOLS + 1) return { ok: false, words: `A code has ${CODE_SYMBOLS + 1} characters; this has ${text.length}.` };
+  if (text.length !== CODE_SYMBOLS + 1)
+    return { ok: false, words: `A code has ${CODE_SYMBOLS + 1} characters; this has ${text.length}.` };
   const value = decodeBase32(text.slice(0, CODE_SYMBOLS));
   const check = text.charAt(CODE_SYMBOLS);
-  if (value === null || !CHECK_SYMBOLS.includes(check)) return { ok: false, words: 'A code has digits and letters only, and no U before its last character.' };
-  if (checkSymbol(value) !== check) return { ok: false, words: 'One character of this code is wrong; the last one does not match the others.' };
+  if (value === null || !CHECK_SYMBOLS.includes(check))
+    return { ok: false, words: 'A code has digits and letters only, and no U before its last character.' };
+  if (checkSymbol(value) !== check)
+    return { ok: false, words: 'One character of this code is wrong; the last one does not match the others.' };
   return { ok: true, code: text };
 }

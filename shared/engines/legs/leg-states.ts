@@ -22,9 +22,20 @@ const NEXT: Readonly<Record<LegState, readonly LegState[]>> = {
  * finished, or early on purpose.
  */
 export function checkLegMove(leg: LegMoveFacts, move: { to: LegState; early: boolean }): MoveAnswer {
-  if (!NEXT[leg.state].includes(move.to)) return { ok: false, words: `A leg that is ${leg.state.replace('-', ' ')} can not become ${move.to.replace('-', ' ')}.` };
-  if (move.to === 'finished' && leg.held) return { ok: false, words: 'An open report holds this leg. It can be finished when the report is closed or withdrawn.' };
+  if (!NEXT[leg.state].includes(move.to))
+    return {
+      ok: false,
+      words: `A leg that is ${leg.state.replace('-', ' ')} can not become ${move.to.replace('-', ' ')}.`,
+    };
+  if (move.to === 'finished' && leg.held)
+    return {
+      ok: false,
+      words: 'An open report holds this leg. It can be finished when the report is closed or withdrawn.',
+    };
   if (move.to === 'under-way' && leg.state === 'planned' && leg.waitsFor.length > 0 && !move.early)
-    return { ok: false, words: `This leg waits for ${leg.waitsFor.join(', ')}. Say that you start early if you mean to.` };
+    return {
+      ok: false,
+      words: `This leg waits for ${leg.waitsFor.join(', ')}. Say that you start early if you mean to.`,
+    };
   return { ok: true };
 }

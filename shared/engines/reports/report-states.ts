@@ -1,4 +1,5 @@
-export type ReportState = 'raised' | 'answered' | 'agreed' | 'being-reworked' | 'to-be-verified' | 'closed' | 'withdrawn';
+export type ReportState =
+  'raised' | 'answered' | 'agreed' | 'being-reworked' | 'to-be-verified' | 'closed' | 'withdrawn';
 
 export type ReportAct =
   | 'answer'
@@ -56,14 +57,15 @@ export type ReportAnswer = { ok: true; state: ReportState } | { ok: false; words
 /** What an act makes of a report, or why it cannot be done as things stand. */
 export function nextReportState(report: ReportFacts, act: ReportAct): ReportAnswer {
   const step = REPORT_STEPS[act];
-  if (!step.from.includes(report.state)) return { ok: false, words: `The report is ${REPORT_STATE_WORDS[report.state]}. Nothing was changed.` };
+  if (!step.from.includes(report.state))
+    return { ok: false, words: `The report is ${REPORT_STATE_WORDS[report.state]}. Nothing was changed.` };
   if (act === 'start-rework' && report.shows && report.consent !== 'given')
     return {
       ok: false,
       words:
         report.consent === 'refused'
           ? 'The client refused this rework, since it shows. Answer with another one.'
-          : 'This rework shows, so it waits for the client\'s consent.',
+          : "This rework shows, so it waits for the client's consent.",
     };
   return { ok: true, state: step.to };
 }

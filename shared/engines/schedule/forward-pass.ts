@@ -40,7 +40,9 @@ export class ScheduleLoopError extends EngineInputError {
  */
 export function forwardPass(activities: readonly Activity[]): Map<string, Timing> {
   const byId = new Map(activities.map((activity) => [activity.id, activity]));
-  const loop = findLoop(new Map(activities.map((activity) => [activity.id, activity.after.map((before) => before.id)])));
+  const loop = findLoop(
+    new Map(activities.map((activity) => [activity.id, activity.after.map((before) => before.id)])),
+  );
   if (loop) throw new ScheduleLoopError(loop);
   const timings = new Map<string, Timing>();
 

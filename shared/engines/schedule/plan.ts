@@ -63,16 +63,20 @@ function networkOf(input: PlanInput, days: WorkingDays, durationOf: (leg: PlanLe
     const arrivals = input.handoffs.filter((handoff) => handoff.toLegId === leg.id);
     const lags = new Map(leg.afterLegIds.filter((id) => liveIds.has(id)).map((id) => [id, 0]));
     for (const { fromLegId, transitDays, doneOn } of arrivals)
-      if (fromLegId && liveIds.has(fromLegId) && !doneOn) lags.set(fromLegId, Math.max(lags.get(fromLegId) ?? 0, transitDays));
+      if (fromLegId && liveIds.has(fromLegId) && !doneOn)
+        lags.set(fromLegId, Math.max(lags.get(fromLegId) ?? 0, transitDays));
     if (leg.startedOn) {
       const start = days.numberOf(leg.startedOn);
-      if (leg.finishedOn) return { id: leg.id, duration: Math.max(0, dayAfter(leg.finishedOn) - start), after: [], notBefore: start };
+      if (leg.finishedOn)
+        return { id: leg.id, duration: Math.max(0, dayAfter(leg.finishedOn) - start), after: [], notBefore: start };
       // What a hold leaves undone begins again today at the earliest.
       const done = leg.heldSince ? Math.max(0, days.numberOf(leg.heldSince) - start) : 0;
       const left = leg.heldSince ? today + Math.max(1, durationOf(leg) - done) : today + 1;
       return { id: leg.id, duration: durationOf(leg), after: [], notBefore: start, endNotBefore: left };
     }
-    const given = arrivals.flatMap(({ agreedOn, doneOn }) => (doneOn ?? agreedOn ? [days.numberOf((doneOn ?? agreedOn) as IsoDay)] : []));
+    const given = arrivals.flatMap(({ agreedOn, doneOn }) =>
+      (doneOn ?? agreedOn) ? [days.numberOf((doneOn ?? agreedOn) as IsoDay)] : [],
+    );
     const notBefore = Math.max(today, leg.plannedStartOn ? days.numberOf(leg.plannedStartOn) : 0, ...given);
     return { id: leg.id, duration: durationOf(leg), after: [...lags].map(([id, lag]) => ({ id, lag })), notBefore };
   });
@@ -82,7 +86,9 @@ function networkOf(input: PlanInput, days: WorkingDays, durationOf: (leg: PlanLe
       id: deliveryId(handoff.id),
       duration: 0,
       after: handoff.doneOn ? [] : [{ id: handoff.fromLegId ?? '', lag: handoff.transitDays }],
-      ...(handoff.doneOn ?? handoff.agreedOn ? { notBefore: dayAfter((handoff.doneOn ?? handoff.agreedOn) as IsoDay) } : {}),
+      ...((handoff.doneOn ?? handoff.agreedOn)
+        ? { notBefore: dayAfter((handoff.doneOn ?? handoff.agreedOn) as IsoDay) }
+        : {}),
     }));
   return [...legs, ...deliveries];
 }
@@ -119,14 +125,20 @@ export function planOf(input: PlanInput): Plan {
   const soonest = days.numberOf(input.todayIso) + 1;
   const within = (finish: number): IsoDay => lastDay(open.length > 0 ? Math.max(finish, soonest) : finish);
   return {
-    legs: new Map([...likely.values()].filter((timing) => legsById.has(timing.id)).map((timing) => [timing.id, legDays(timing)])),
+    legs: new Map(
+      [...likely.values()].filter((timing) => legsById.has(timing.id)).map((timing) => [timing.id, legDays(timing)]),
+    ),
     path: path.filter((id) => legsById.has(id)),
     meanDays: end,
     sigmaDays,
-    expected: means.size === 0 ? null : { fromDay: within(end - Z_90 * sigmaDays), toDay: within(end + Z_90 * sigmaDays) },
+    expected:
+      means.size === 0 ? null : { fromDay: within(end - Z_90 * sigmaDays), toDay: within(end + Z_90 * sigmaDays) },
   };
 }
 
 /** The plan as it would be if a handoff were agreed for a day. */
 export const planWithDay = (input: PlanInput, handoffId: string, onDay: IsoDay): Plan =>
-  planOf({ ...input, handoffs: input.handoffs.map((handoff) => (handoff.id === handoffId ? { ...handoff, agreedOn: onDay } : handoff)) });
+  planOf({
+    ...input,
+    handoffs: input.handoffs.map((handoff) => (handoff.id === handoffId ? { ...handoff, agreedOn: onDay } : handoff)),
+  });

@@ -8,7 +8,8 @@ export interface ThreePoint {
 
 /** Mean of a three-point estimate, (a + 4m + b) / 6 (Malcolm, Roseboom, Clark and Fazar 1959), in the estimate's unit. */
 export function pertMean({ hopeful, likely, bad }: ThreePoint): number {
-  if (!(hopeful <= likely && likely <= bad)) throw new EngineInputError('likely', 'Estimates must be in order: hopeful, likely, bad');
+  if (!(hopeful <= likely && likely <= bad))
+    throw new EngineInputError('likely', 'Estimates must be in order: hopeful, likely, bad');
   return (hopeful + 4 * likely + bad) / 6;
 }
 

@@ -5,7 +5,10 @@ import type { CommissionFacts } from './commission-facts.ts';
 /** What the client reads of a hold whose words the lead has not released. */
 export const DEFAULT_HOLD_WORDS = 'A part does not yet go together as agreed';
 
-const by = <T>(key: (item: T) => string) => (one: T, other: T): number => (key(one) < key(other) ? -1 : key(one) > key(other) ? 1 : 0);
+const by =
+  <T>(key: (item: T) => string) =>
+  (one: T, other: T): number =>
+    key(one) < key(other) ? -1 : key(one) > key(other) ? 1 : 0;
 
 type Report = CommissionFacts['reports'][number];
 
@@ -34,18 +37,34 @@ export function clientFactsFrom(all: CommissionFacts): ClientFacts {
   const nameOf = (id: string): string => party.get(id)?.name ?? '';
   const isClient = (id: string): boolean => party.get(id)?.isClient ?? false;
   const clients = all.parties.filter((one) => one.isClient).sort(by((one) => one.id));
-  const openReports = all.reports.filter((report) => isOpenReport(report.state)).sort(by((report) => report.raisedOn + report.id));
+  const openReports = all.reports
+    .filter((report) => isOpenReport(report.state))
+    .sort(by((report) => report.raisedOn + report.id));
 
   const consents = openReports.flatMap((report) =>
     report.note?.consent === 'asked'
-      ? [{ kind: 'consent' as const, refId: report.note.id, words: 'Your consent to a correction that will show', sinceDay: report.note.consentAskedOn ?? report.raisedOn }]
+      ? [
+          {
+            kind: 'consent' as const,
+            refId: report.note.id,
+            words: 'Your consent to a correction that will show',
+            sinceDay: report.note.consentAskedOn ?? report.raisedOn,
+          },
+        ]
       : [],
   );
   const days = all.handoffs.flatMap((handoff) => {
     const offer = handoff.standingOffer;
     const touchesClient = isClient(handoff.fromPartyId) || isClient(handoff.toPartyId);
     return offer && touchesClient && !handoff.doneOn && !isClient(offer.byPartyId)
-      ? [{ kind: 'handoff-day' as const, refId: handoff.id, words: `${nameOf(offer.byPartyId)} offers a day to hand over to you`, sinceDay: offer.offeredOn }]
+      ? [
+          {
+            kind: 'handoff-day' as const,
+            refId: handoff.id,
+            words: `${nameOf(offer.byPartyId)} offers a day to hand over to you`,
+            sinceDay: offer.offeredOn,
+          },
+        ]
       : [];
   });
 
@@ -53,7 +72,14 @@ export function clientFactsFrom(all: CommissionFacts): ClientFacts {
     pieceTitle: all.title,
     code: all.code,
     clientName: clients[0]?.name ?? null,
-    parts: [...all.parts].sort(by((part) => part.id)).map((part) => ({ id: part.id, name: part.name, holderName: nameOf(part.holderPartyId), sinceDay: part.holderSince })),
+    parts: [...all.parts]
+      .sort(by((part) => part.id))
+      .map((part) => ({
+        id: part.id,
+        name: part.name,
+        holderName: nameOf(part.holderPartyId),
+        sinceDay: part.holderSince,
+      })),
     legs: all.legs
       .filter((leg) => leg.state !== 'dropped')
       .sort(by((leg) => (leg.startedOn ?? leg.likelyStartOn ?? leg.plannedStartOn ?? '9999') + leg.id))
@@ -94,6 +120,10 @@ export function clientFactsFrom(all: CommissionFacts): ClientFacts {
 function othersIn(openReports: readonly Report[], nameOf: (id: string) => string): ClientFacts['waitingOnOthers'] {
   const waits = openReports
     .filter((report) => report.blocking && report.note?.consent !== 'asked')
-    .map((report) => (report.state === 'answered' || report.state === 'to-be-verified' ? report.raisedByPartyId : report.answerPartyId));
-  return [...new Set(waits)].sort(by((id) => nameOf(id) + id)).map((id) => ({ who: nameOf(id), forWhat: 'a correction' }));
+    .map((report) =>
+      report.state === 'answered' || report.state === 'to-be-verified' ? report.raisedByPartyId : report.answerPartyId,
+    );
+  return [...new Set(waits)]
+    .sort(by((id) => nameOf(id) + id))
+    .map((id) => ({ who: nameOf(id), forWhat: 'a correction' }));
 }

@@ -10,7 +10,14 @@ export interface ClientFacts {
   clientName: string | null;
   parts: { id: string; name: string; holderName: string; sinceDay: IsoDay | null }[];
   legs: ClientLeg[];
-  handoffs: { id: string; partIds: string[]; fromName: string; toName: string; agreedOn: IsoDay | null; doneOn: IsoDay | null }[];
+  handoffs: {
+    id: string;
+    partIds: string[];
+    fromName: string;
+    toName: string;
+    agreedOn: IsoDay | null;
+    doneOn: IsoDay | null;
+  }[];
   waitingOnClient: { kind: 'consent' | 'handoff-day'; refId: string; words: string; sinceDay: IsoDay }[];
   waitingOnOthers: { who: string; forWhat: string }[];
   /** Likely range of the delivery, and the one told before it where that differs. */

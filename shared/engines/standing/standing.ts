@@ -1,4 +1,11 @@
-import { dayRange, daysBetween, relativeDay, shortDay, weekdayDayMonth, type IsoDay } from '../../units/calendar-day.ts';
+import {
+  dayRange,
+  daysBetween,
+  relativeDay,
+  shortDay,
+  weekdayDayMonth,
+  type IsoDay,
+} from '../../units/calendar-day.ts';
 import type { ClientFacts, ClientLeg } from './client-facts.ts';
 import { LEG_WORDS } from './leg-words.ts';
 
@@ -34,7 +41,14 @@ const heldLegs = (facts: ClientFacts): (ClientLeg & { held: NonNullable<ClientLe
 
 function holdSentence(leg: ClientLeg & { held: NonNullable<ClientLeg['held']> }, today: IsoDay): string {
   const { held } = leg;
-  const shows = held.willShow === null ? '' : held.willShow ? (held.consentAsked ? ' It will show, and waits for your consent.' : ' It will show.') : ' Nothing will show.';
+  const shows =
+    held.willShow === null
+      ? ''
+      : held.willShow
+        ? held.consentAsked
+          ? ' It will show, and waits for your consent.'
+          : ' It will show.'
+        : ' Nothing will show.';
   return `Held at ${leg.shopName} since ${sinceWords(held.sinceDay, today)} for a small correction: ${startLower(held.clientWords)}.${shows}`;
 }
 
@@ -57,32 +71,66 @@ function movedWords(expected: NonNullable<ClientFacts['expected']>): string {
 function headlineOf(facts: ClientFacts, today: IsoDay): string {
   if (facts.deliveredOn) return `Delivered on ${weekdayDayMonth(facts.deliveredOn)}.`;
   const sentences: string[] = [];
-  if (facts.waitingOnClient.length > 0) sentences.push(`Waiting on ${facts.clientName ?? 'the client'}: ${joined(facts.waitingOnClient.map((wait) => startLower(wait.words)))}.`);
+  if (facts.waitingOnClient.length > 0)
+    sentences.push(
+      `Waiting on ${facts.clientName ?? 'the client'}: ${joined(facts.waitingOnClient.map((wait) => startLower(wait.words)))}.`,
+    );
   const held = heldLegs(facts);
   for (const leg of held) sentences.push(holdSentence(leg, today));
   const going = facts.legs.filter((leg) => leg.state === 'under-way' && !leg.held);
-  if (going.length > 0) sentences.push(`${startUpper(joined(going.map((leg) => `${LEG_WORDS[leg.kind].now} at ${leg.shopName}`)))}.`);
+  if (going.length > 0)
+    sentences.push(`${startUpper(joined(going.map((leg) => `${LEG_WORDS[leg.kind].now} at ${leg.shopName}`)))}.`);
   if (held.length === 0 && going.length === 0) sentences.push(idleSentence(facts, today));
-  if (facts.expected) sentences.push(`Expected ${dayRange(facts.expected.fromDay, facts.expected.toDay)}${movedWords(facts.expected)}.`);
+  if (facts.expected)
+    sentences.push(`Expected ${dayRange(facts.expected.fromDay, facts.expected.toDay)}${movedWords(facts.expected)}.`);
   return sentences.filter(Boolean).join(' ');
 }
 
 function idleSentence(facts: ClientFacts, today: IsoDay): string {
   if (facts.legs.length === 0) return 'The brief is being settled; no work is planned yet.';
-  if (facts.legs.every((leg) => leg.state === 'finished')) return 'All work is finished; it is on its way to being handed over.';
+  if (facts.legs.every((leg) => leg.state === 'finished'))
+    return 'All work is finished; it is on its way to being handed over.';
   const next = facts.legs.find((leg) => leg.state === 'planned');
   if (!next) return '';
-  const when = next.plannedStartOn ? `, planned for ${weekdayDayMonth(next.plannedStartOn)} (${relativeDay(next.plannedStartOn, today)})` : '';
+  const when = next.plannedStartOn
+    ? `, planned for ${weekdayDayMonth(next.plannedStartOn)} (${relativeDay(next.plannedStartOn, today)})`
+    : '';
   return `Between benches. Next: ${startLower(LEG_WORDS[next.kind].next)} at ${next.shopName}${when}.`;
 }
 
 function stepOf(leg: ClientLeg): TimelineStep {
   const words = LEG_WORDS[leg.kind];
-  if (leg.state === 'finished') return { id: leg.id, state: 'done', title: words.done, words: leg.finishedOn ? `done ${shortDay(leg.finishedOn)}` : 'done', day: leg.finishedOn };
-  if (leg.held) return { id: leg.id, state: 'held', title: `${words.next}, paused for a correction`, words: startLower(leg.held.clientWords), day: leg.held.sinceDay };
+  if (leg.state === 'finished')
+    return {
+      id: leg.id,
+      state: 'done',
+      title: words.done,
+      words: leg.finishedOn ? `done ${shortDay(leg.finishedOn)}` : 'done',
+      day: leg.finishedOn,
+    };
+  if (leg.held)
+    return {
+      id: leg.id,
+      state: 'held',
+      title: `${words.next}, paused for a correction`,
+      words: startLower(leg.held.clientWords),
+      day: leg.held.sinceDay,
+    };
   if (leg.state === 'under-way')
-    return { id: leg.id, state: 'now', title: words.next, words: `at ${leg.shopName}${leg.startedOn ? ` since ${shortDay(leg.startedOn)}` : ''}`, day: leg.startedOn };
-  return { id: leg.id, state: 'next', title: words.next, words: leg.plannedStartOn ? `likely from ${shortDay(leg.plannedStartOn)}` : 'to come', day: leg.plannedStartOn };
+    return {
+      id: leg.id,
+      state: 'now',
+      title: words.next,
+      words: `at ${leg.shopName}${leg.startedOn ? ` since ${shortDay(leg.startedOn)}` : ''}`,
+      day: leg.startedOn,
+    };
+  return {
+    id: leg.id,
+    state: 'next',
+    title: words.next,
+    words: leg.plannedStartOn ? `likely from ${shortDay(leg.plannedStartOn)}` : 'to come',
+    day: leg.plannedStartOn,
+  };
 }
 
 function nextAgreed(facts: ClientFacts, today: IsoDay): Standing['nextAgreedDate'] {
@@ -91,7 +139,12 @@ function nextAgreed(facts: ClientFacts, today: IsoDay): Standing['nextAgreedDate
     .filter((handoff) => handoff.agreedOn && !handoff.doneOn)
     .sort((one, other) => ((one.agreedOn ?? '') + one.id < (other.agreedOn ?? '') + other.id ? -1 : 1));
   if (!next?.agreedOn) return null;
-  const what = joined(next.partIds.map((id) => partNames.get(id) ?? '').filter(Boolean).sort());
+  const what = joined(
+    next.partIds
+      .map((id) => partNames.get(id) ?? '')
+      .filter(Boolean)
+      .sort(),
+  );
   return {
     handoffId: next.id,
     day: next.agreedOn,
@@ -109,17 +162,45 @@ export function standingFor(facts: ClientFacts, today: IsoDay): Standing {
   const over = facts.deliveredOn !== null;
   const steps = facts.legs.map(stepOf);
   const last: TimelineStep = over
-    ? { id: 'delivery', state: 'done', title: 'Handed over', words: facts.deliveredOn ? `on ${shortDay(facts.deliveredOn)}` : '', day: facts.deliveredOn }
-    : { id: 'delivery', state: 'next', title: 'Then handed over', words: facts.expected ? `likely ${dayRange(facts.expected.fromDay, facts.expected.toDay)}` : 'no date yet', day: facts.expected?.fromDay ?? null };
+    ? {
+        id: 'delivery',
+        state: 'done',
+        title: 'Handed over',
+        words: facts.deliveredOn ? `on ${shortDay(facts.deliveredOn)}` : '',
+        day: facts.deliveredOn,
+      }
+    : {
+        id: 'delivery',
+        state: 'next',
+        title: 'Then handed over',
+        words: facts.expected ? `likely ${dayRange(facts.expected.fromDay, facts.expected.toDay)}` : 'no date yet',
+        day: facts.expected?.fromDay ?? null,
+      };
   return {
     headline: headlineOf(facts, today),
     waitsOnYou: over ? [] : facts.waitingOnClient,
     waitsOnOthers: over ? [] : facts.waitingOnOthers.map((wait) => `${wait.who}, for ${wait.forWhat}`),
-    whereEachPartIs: facts.parts.map((part) => ({ partId: part.id, words: `${part.name}: with ${part.holderName}${part.sinceDay ? ` since ${shortDay(part.sinceDay)}` : ''}` })),
-    held: heldLegs(facts).map((leg) => ({ legId: leg.id, words: holdSentence(leg, today), sinceDay: leg.held.sinceDay })),
-    now: facts.legs.filter((leg) => leg.state === 'under-way' && !leg.held).map((leg) => ({ legId: leg.id, words: `${startUpper(LEG_WORDS[leg.kind].now)} at ${leg.shopName}` })),
+    whereEachPartIs: facts.parts.map((part) => ({
+      partId: part.id,
+      words: `${part.name}: with ${part.holderName}${part.sinceDay ? ` since ${shortDay(part.sinceDay)}` : ''}`,
+    })),
+    held: heldLegs(facts).map((leg) => ({
+      legId: leg.id,
+      words: holdSentence(leg, today),
+      sinceDay: leg.held.sinceDay,
+    })),
+    now: facts.legs
+      .filter((leg) => leg.state === 'under-way' && !leg.held)
+      .map((leg) => ({ legId: leg.id, words: `${startUpper(LEG_WORDS[leg.kind].now)} at ${leg.shopName}` })),
     nextAgreedDate: over ? null : nextAgreed(facts, today),
-    expected: over || !facts.expected ? null : { fromDay: facts.expected.fromDay, toDay: facts.expected.toDay, words: `${dayRange(facts.expected.fromDay, facts.expected.toDay)}${movedWords(facts.expected)}` },
+    expected:
+      over || !facts.expected
+        ? null
+        : {
+            fromDay: facts.expected.fromDay,
+            toDay: facts.expected.toDay,
+            words: `${dayRange(facts.expected.fromDay, facts.expected.toDay)}${movedWords(facts.expected)}`,
+          },
     timeline: [...steps, last],
   };
 }
