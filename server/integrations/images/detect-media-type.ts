@@ -1,6 +1,7 @@
 import { open } from 'node:fs/promises';
 import { FileTypeParser } from 'file-type/node';
 import { FileRefusedError } from './file-refused-error.ts';
+import { isMp3 } from './is-mp3.ts';
 import { ACCEPTED_MEDIA, type MediaKind } from './media-types.ts';
 import { detectText, startsAsMarkup } from './text-types.ts';
 
@@ -10,6 +11,7 @@ export interface DetectedMedia {
 }
 
 const DETECT_MS = 5000;
+const HEAD_BYTES = 4096;
 const STL_HEADER_BYTES = 84;
 const STL_TRIANGLE_BYTES = 50;
 const TAKEN =
@@ -47,7 +49,7 @@ async function readHead(filePath: string): Promise<{ head: Buffer; byteSize: num
   const handle = await open(filePath, 'r');
   try {
     const { size } = await handle.stat();
-    const { buffer, bytesRead } = await handle.read(Buffer.alloc(1024), 0, 1024, 0);
+    const { buffer, bytesRead } = await handle.read(Buffer.alloc(HEAD_BYTES), 0, HEAD_BYTES, 0);
     return { head: buffer.subarray(0, bytesRead), byteSize: size };
   } finally {
     await handle.close();
@@ -82,8 +84,9 @@ export async function detectMediaType(filePath: string): Promise<DetectedMedia> 
     throw new FileRefusedError('empty', 'This file is empty, so nothing was kept. Choose it again or send another.');
   if (startsAsMarkup(head.toString('latin1').replace(/^\u00EF\u00BB\u00BF/, ''))) throw markupRefused();
   const sniffed = await sniff(filePath);
-  // The detector calls any text that begins with "solid" a mesh; a note about solid brass is none.
-  const byStart = sniffed === 'model/stl' ? undefined : sniffed;
+  // The detector calls any text that begins with "solid" a mesh and any eleven set bits a sound.
+  const isGuess = sniffed === 'model/stl' || (sniffed === 'audio/mpeg' && !isMp3(head));
+  const byStart = isGuess ? undefined : sniffed;
   const mediaType = byStart ?? (isBinaryStl(head, byteSize) ? 'model/stl' : await detectText(filePath));
   if (mediaType === 'markup' || mediaType === 'application/xml' || mediaType === 'text/html') throw markupRefused();
   const facts = mediaType === null ? undefined : ACCEPTED_MEDIA[mediaType];

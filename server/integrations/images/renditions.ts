@@ -82,9 +82,10 @@ async function encode(image: Sharp, size: ImageSize): Promise<Rendition> {
 }
 
 async function render(filePath: string): Promise<Record<ImageSize, Rendition>> {
-  const source = sharp(filePath, { failOn: 'error', limitInputPixels: INPUT_PIXELS_MAX });
   try {
-    assertPixels(await source.metadata());
+    // Only the header is read here, so that the refusal can say the size; the decoder has the same limit again.
+    assertPixels(await sharp(filePath, { limitInputPixels: false }).metadata());
+    const source = sharp(filePath, { failOn: 'error', limitInputPixels: INPUT_PIXELS_MAX });
     // One decode: the largest size is kept as bare pixels, which carry no metadata, and the others are made from it.
     const { data, info } = await source
       .autoOrient()
