@@ -113,8 +113,7 @@ export async function sendStoredBytes(
   try {
     await pipeline(opened.stream, res);
   } catch (error) {
-    res.destroy();
-    // A reader who seeks or leaves closes the connection; that is no fault.
+    // The pipeline has cut the connection. A reader who seeks or leaves closes the connection; that is no fault.
     if ((error as NodeJS.ErrnoException).code !== 'ERR_STREAM_PREMATURE_CLOSE') throw error;
   }
 }

@@ -13,6 +13,8 @@ export interface Box {
 
 /** A file with more boxes than this is not a recording but an attempt to keep us busy. */
 const BOXES_MAX = 200_000;
+/** Read at once, since headers of small boxes lie close together. */
+const WINDOW_BYTES = 4096;
 
 export const videoUnreadable = (): FileRefusedError =>
   new FileRefusedError(
@@ -20,11 +22,13 @@ export const videoUnreadable = (): FileRefusedError =>
     'This video is damaged or built in a way that Ferrule can not check for places, so nothing of it was kept. Export it again as MP4 and send that.',
   );
 
-/** Reads and overwrites boxes of one open file; only headers are ever held in memory. */
+/** Reads and overwrites boxes of one open file; only headers and tables are ever held in memory. */
 export class BoxFile {
   readonly #handle: FileHandle;
   readonly byteSize: number;
   #seen = 0;
+  #window = Buffer.alloc(0);
+  #windowStart = 0;
 
   constructor(handle: FileHandle, byteSize: number) {
     this.#handle = handle;
@@ -33,12 +37,18 @@ export class BoxFile {
 
   /** Exactly `length` bytes. @throws FileRefusedError where the file ends before. */
   async read(at: number, length: number): Promise<Buffer> {
-    const { bytesRead, buffer } = await this.#handle.read(Buffer.alloc(length), 0, length, at);
-    if (bytesRead !== length) throw videoUnreadable();
-    return buffer;
+    const from = at - this.#windowStart;
+    if (from >= 0 && from + length <= this.#window.length) return this.#window.subarray(from, from + length);
+    const wanted = Math.max(length, WINDOW_BYTES);
+    const { bytesRead, buffer } = await this.#handle.read(Buffer.alloc(wanted), 0, wanted, at);
+    if (bytesRead < length) throw videoUnreadable();
+    this.#window = buffer.subarray(0, Math.min(bytesRead, WINDOW_BYTES));
+    this.#windowStart = at;
+    return buffer.subarray(0, length);
   }
 
   async write(at: number, bytes: Uint8Array): Promise<void> {
+    this.#window = Buffer.alloc(0);
     await this.#handle.write(bytes, 0, bytes.length, at);
   }
 
