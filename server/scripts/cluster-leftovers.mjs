@@ -1,7 +1,7 @@
-import { readFileSync, rmSync } from 'node:fs';
+import { existsSync, readFileSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { Halt } from './halt.mjs';
-import { processesIn, startTicks, waitUntil } from './process-table.mjs';
+import { processesIn, waitUntil } from './process-table.mjs';
 
 /**
  * What PostgreSQL wrote about the server of a data folder.
@@ -36,7 +36,7 @@ export function livingPostmaster(dataFolder) {
 
 /**
  * Ends a server that an earlier run left behind, waits for orphaned backends, and removes a postmaster.pid whose number
- * meanwhile belongs to a stranger (which PostgreSQL itself would take for a running server).
+ * belongs to a stranger or to a dead process that nobody has reaped: PostgreSQL takes both for a running server.
  * @param {string} dataFolder
  * @throws {Halt} when something still works on the data: starting then would damage it
  */
@@ -50,5 +50,5 @@ export async function clearLeftovers(dataFolder) {
       `A PostgreSQL process (${processesIn(dataFolder).join(', ')}) still works on ${dataFolder} and does not end. End it, then start again.`,
     );
   const written = readPostmaster(dataFolder);
-  if (written && startTicks(written.pid) !== null) rmSync(join(dataFolder, 'postmaster.pid'), { force: true });
+  if (written && existsSync(`/proc/${written.pid}`)) rmSync(join(dataFolder, 'postmaster.pid'), { force: true });
 }
