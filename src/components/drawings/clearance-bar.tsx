@@ -31,7 +31,7 @@ export function ClearanceBar({ title, agreed, worstUm, meanUm, doubtUm }: Cleara
   const x = scaleLinear()
     .domain([Math.min(...all) - marginUm, Math.max(...all) + marginUm])
     .nice(5)
-    .range([14, widthPx - 14]);
+    .range([26, widthPx - 26]);
   const middleY = BAR.y + BAR.height / 2;
   const ticks = x.ticks(widthPx < 420 ? 4 : 7);
   const words = {
@@ -83,7 +83,7 @@ export function ClearanceBar({ title, agreed, worstUm, meanUm, doubtUm }: Cleara
             y={BAR.y + BAR.height + 20}
             textAnchor="middle"
             fontSize={TEXT_PX - 1}
-            className="fill-lead-grey figures"
+            className="fill-lead-grey font-mono"
           >
             {signedUm(valueUm)}
           </text>
@@ -142,7 +142,7 @@ export function ClearanceBar({ title, agreed, worstUm, meanUm, doubtUm }: Cleara
   );
 }
 
-const scaleOf = (x: (valueUm: number) => number): number => +(((x(1000) - x(0)) / PX_PER_MM) as number).toPrecision(2);
+const scaleOf = (x: (valueUm: number) => number): number => +((x(1000) - x(0)) / PX_PER_MM).toPrecision(2);
 
 function inWords({ agreed, worstUm, meanUm, doubtUm }: Omit<ClearanceBarProps, 'title'>): string {
   const range = agreed ? `Agreed ${signedUm(agreed.minUm)} to ${signedUm(agreed.maxUm)} µm. ` : 'Nothing agreed. ';

@@ -1,3 +1,5 @@
+import { textWidthPx } from './text-width.ts';
+
 export const DIMENSION_TEXT_PX = 13;
 
 export interface DimensionProps {
@@ -12,18 +14,20 @@ export interface DimensionProps {
   className?: string;
 }
 
-/** A dimension along the axis: extension lines, arrow heads, the figure above the line (as ISO 129-1 sets it). */
+/**
+ * A dimension along the axis: extension lines, arrow heads, the figure above the line, or beyond its end where the line
+ * is too short for it (as ISO 129-1 sets it).
+ */
 export function LengthDimension({ from, to, at, extendFrom, words, className = 'stroke-lead-grey' }: DimensionProps) {
+  const fits = textWidthPx(words, DIMENSION_TEXT_PX, 'mono') < to - from - 8;
   return (
     <g className={className} strokeWidth="1" fill="none">
       {extendFrom !== undefined && <path d={`M${from} ${extendFrom}V${at + 4}M${to} ${extendFrom}V${at + 4}`} />}
       <path d={`M${from} ${at}H${to}M${from + 7} ${at - 3}L${from} ${at}l7 3M${to - 7} ${at - 3}L${to} ${at}l-7 3`} />
       <text
-        x={(from + to) / 2}
-        y={at - 5}
-        textAnchor="middle"
+        {...(fits ? { x: (from + to) / 2, y: at - 5, textAnchor: 'middle' } : { x: to + 8, y: at + 4.5 })}
         fontSize={DIMENSION_TEXT_PX}
-        className="fill-soot stroke-vellum figures"
+        className="fill-soot stroke-vellum font-mono"
         strokeWidth="4"
         paintOrder="stroke"
       >
@@ -47,7 +51,7 @@ export function DiameterDimension({ from, to, at, extendFrom, words, className =
         transform={`rotate(-90 ${textX} ${middle})`}
         textAnchor="middle"
         fontSize={DIMENSION_TEXT_PX}
-        className="fill-soot stroke-vellum figures"
+        className="fill-soot stroke-vellum font-mono"
         strokeWidth="4"
         paintOrder="stroke"
       >

@@ -25,7 +25,7 @@ export function DrawingFrame(props: DrawingFrameProps) {
         width={widthPx}
         height={heightPx}
         viewBox={`0 0 ${widthPx} ${heightPx}`}
-        className="block max-w-full overflow-visible font-sans"
+        className="block h-auto max-w-full overflow-visible font-sans"
       >
         <title id={`${id}-title`}>{title}</title>
         <desc id={`${id}-words`}>{description}</desc>

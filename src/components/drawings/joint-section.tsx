@@ -81,7 +81,7 @@ export function JointSection({ title, holeName, shaftName, formatLength = format
           to={layout.removal.toX}
           at={bottomY + 26}
           extendFrom={bottomY + 4}
-          words={`off over ${formatLength(input.removal.overLengthMm)}`}
+          words={`over ${formatLength(input.removal.overLengthMm)}`}
           className="stroke-oxide"
         />
       )}

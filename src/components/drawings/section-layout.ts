@@ -43,7 +43,7 @@ export interface SectionLayout {
 const TOP_PX = 40;
 const BOTTOM_PX = 64;
 const SIDE_PX = 84;
-const MAX_HALF_PX = 120;
+const MAX_HALF_PX = 165;
 /** A gap below this many pixels can't be told from a line. */
 const WANTED_GAP_PX = 9;
 
@@ -62,7 +62,7 @@ export function layoutSection(widthPx: number, input: SectionInput): SectionLayo
   const gapMm = (holeDiameterMm - shaftDiameterMm) / 2;
   const smallestMm = Math.max(Math.abs(gapMm), (removal?.onDiameterMm ?? 0) / 2);
   const exaggeration =
-    smallestMm === 0 || px(smallestMm) >= WANTED_GAP_PX ? 1 : standardRatio((WANTED_GAP_PX / px(smallestMm)) * 1.6);
+    smallestMm === 0 || px(smallestMm) >= WANTED_GAP_PX ? 1 : standardRatio((WANTED_GAP_PX / px(smallestMm)) * 1.2);
 
   const sleeveX = Math.round((widthPx - px(lengthMm)) / 2);
   const freeEndX = sleeveX + px(behindMm);

@@ -50,13 +50,25 @@ export function ZoneDrawing({ title, nominalMm, nominalInWords, hole, shaft }: Z
         />
       </defs>
 
-      <text x={plot.x - 8} y={plot.y - 14} textAnchor="end" className="fill-lead-grey figures" fontSize={ZONE_TEXT_PX}>
+      <text
+        x={plot.x - 8}
+        y={plot.y - 14}
+        textAnchor="end"
+        className="fill-lead-grey font-mono"
+        fontSize={ZONE_TEXT_PX}
+      >
         µm
       </text>
       {layout.ticks.map(({ valueUm, y }) => (
         <g key={valueUm}>
           <line x1={plot.x} x2={plot.x + plot.width} y1={y} y2={y} className="stroke-hairline" />
-          <text x={plot.x - 8} y={y + 4.5} textAnchor="end" className="fill-lead-grey figures" fontSize={ZONE_TEXT_PX}>
+          <text
+            x={plot.x - 8}
+            y={y + 4.5}
+            textAnchor="end"
+            className="fill-lead-grey font-mono"
+            fontSize={ZONE_TEXT_PX}
+          >
             {signedUm(valueUm)}
           </text>
         </g>
@@ -91,9 +103,8 @@ export function ZoneDrawing({ title, nominalMm, nominalInWords, hole, shaft }: Z
         at={labels.worst}
         className={worstTone === 'oxide' ? 'fill-oxide font-semibold' : 'fill-verdigris font-semibold'}
       />
-      {[...labels.holeReadings, ...labels.shaftReadings].map((label) => (
-        <Words key={`${label.x} ${label.y}`} at={label} className="fill-lead-grey" />
-      ))}
+      <Words at={labels.holeReadings} className="fill-lead-grey" />
+      <Words at={labels.shaftReadings} className="fill-lead-grey" />
     </DrawingFrame>
   );
 }

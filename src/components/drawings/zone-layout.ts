@@ -33,10 +33,7 @@ export interface ZoneLayout {
   holePoints: { x: number; y: number }[];
   shaftPoints: { x: number; y: number }[];
   worst: Box | null;
-  labels: Record<'holeZone' | 'shaftZone' | 'zero' | 'worst', PlacedText | null> & {
-    holeReadings: PlacedText[];
-    shaftReadings: PlacedText[];
-  };
+  labels: Record<'holeZone' | 'shaftZone' | 'zero' | 'worst' | 'holeReadings' | 'shaftReadings', PlacedText | null>;
 }
 
 /** Places zones, points and words for a width in pixels. Pure, so that "labels never overlap" can be tested. */
@@ -94,7 +91,7 @@ export function layoutZones(widthPx: number, zeroLine: string, hole: FitSide, sh
     const above = zone.y - LINE_PX - 2;
     const below = zone.y + zone.height + 3;
     return place(
-      `${side.name} ${side.agreed.label}`,
+      `${side.name}${widthPx < 480 ? '' : ' agreed'} ${side.agreed.label}`,
       zone.x + zone.width / 2,
       preferAbove ? [above, below, bottomY + 4] : [below, above, bottomY + 4],
     );
@@ -106,22 +103,23 @@ export function layoutZones(widthPx: number, zeroLine: string, hole: FitSide, sh
       : null;
   const holeLabel = nearZone(holeZone, hole, true);
   const shaftLabel = nearZone(shaftZone, shaft, false);
-  const feet = (side: FitSide, from: number, to: number): PlacedText[] => {
+  const foot = (side: FitSide, from: number, to: number): PlacedText => {
     const { x, width } = across(from, to);
-    return [side.name, countOfReadings(side.readingsUm.length)].map((text, row) =>
-      place(text, x + width / 2, [bottomY + 6 + row * LINE_PX]),
-    );
+    const rows: [number, number] = [bottomY + 6, bottomY + 6 + LINE_PX];
+    return place(`${side.name}, ${countOfReadings(side.readingsUm.length)}`, x + width / 2, rows);
   };
-  const holeReadings = feet(hole, 0.55, 0.77);
-  const shaftReadings = feet(shaft, 0.77, 0.99);
+  const holeReadings = foot(hole, 0.55, 0.77);
+  const shaftReadings = foot(shaft, 0.77, 0.99);
   const zero = place(`zero line ${zeroLine}`, plot.x + plotWidth * 0.24, [
     zeroY + 5,
     zeroY - LINE_PX - 3,
-    bottomY + 6 + LINE_PX,
+    bottomY + 6 + 2 * LINE_PX,
   ]);
 
+  const texts = [worstLabel, holeLabel, shaftLabel, holeReadings, shaftReadings, zero].filter((text) => text !== null);
+
   return {
-    heightPx: bottomY + 6 + 2 * LINE_PX + 4,
+    heightPx: Math.max(...texts.map(({ box }) => box.y + box.height), bottomY) + 4,
     plot,
     zeroY,
     ratio,

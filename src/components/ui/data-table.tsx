@@ -32,7 +32,7 @@ export interface DataTableProps<Row> {
 }
 
 /**
- * A table where there is room, and a stack of labelled rows where there is not (below 36 rem of its own container).
+ * A table where there is room, and a stack of labelled rows where there is not (below 28 rem of its own container).
  * Roles are written out because browsers drop a table's own when its parts are displayed as blocks.
  */
 export function DataTable<Row>(props: DataTableProps<Row>) {
@@ -40,13 +40,13 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
   if (rows.length === 0 && empty) return <>{empty}</>;
   return (
     <div className="@container min-w-0">
-      <table role="table" className="block w-full border-collapse @xl:table">
+      <table role="table" className="block w-full border-collapse @md:table">
         <caption
-          className={captionShown ? 'block pb-1.5 text-left text-lead-grey stamped @xl:table-caption' : 'sr-only'}
+          className={captionShown ? 'block pb-1.5 text-left text-lead-grey stamped @md:table-caption' : 'sr-only'}
         >
           {caption}
         </caption>
-        <thead role="rowgroup" className="sr-only @xl:not-sr-only @xl:sticky @xl:top-0 @xl:z-10 @xl:bg-vellum">
+        <thead role="rowgroup" className="sr-only @md:not-sr-only @md:sticky @md:top-0 @md:z-10 @md:bg-vellum">
           <tr role="row">
             {columns.map((column) => (
               <th
@@ -65,12 +65,12 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
             ))}
           </tr>
         </thead>
-        <tbody role="rowgroup" className="block @xl:table-row-group">
+        <tbody role="rowgroup" className="block @md:table-row-group">
           {rows.map((row) => (
             <tr
               key={rowKey(row)}
               role="row"
-              className="block border-b border-hairline py-2 first:border-t @xl:table-row @xl:py-0 @xl:first:border-t-0"
+              className="block border-b border-hairline py-2 first:border-t @md:table-row @md:py-0 @md:first:border-t-0"
             >
               {columns.map((column) => (
                 <BodyCell key={column.key} column={column} row={row} />
@@ -90,14 +90,14 @@ function BodyCell<Row>({ column, row }: { column: Column<Row>; row: Row }) {
       role={column.namesRow ? 'rowheader' : 'cell'}
       scope={column.namesRow ? 'row' : undefined}
       className={joinClasses(
-        'flex items-baseline gap-3 px-2 py-1 text-left @xl:table-cell @xl:py-2 @xl:align-baseline',
-        column.align === 'right' && '@xl:text-right',
+        'flex items-baseline gap-3 px-2 py-1 text-left @md:table-cell @md:py-2 @md:align-baseline',
+        column.align === 'right' && '@md:text-right',
         column.namesRow ? 'font-semibold' : 'font-normal',
         column.className,
       )}
     >
       {!column.namesRow && (
-        <span aria-hidden className="w-28 flex-none text-lead-grey stamped @xl:hidden">
+        <span aria-hidden className="w-28 flex-none text-lead-grey stamped @md:hidden">
           {column.header}
         </span>
       )}

@@ -29,4 +29,4 @@ export function useFieldWiring(own: ControlWiring): ControlWiring {
 }
 
 export const CONTROL_CLASS =
-  'w-full min-h-thumb rounded border border-edge bg-vellum px-3 py-2 text-body text-soot hover:border-soot aria-invalid:border-oxide aria-invalid:border-2 disabled:bg-bone disabled:text-lead-grey read-only:bg-bone';
+  'w-full min-h-thumb rounded border border-edge bg-vellum px-3 py-2 text-body text-soot hover:border-soot aria-invalid:border-oxide aria-invalid:border-2 disabled:bg-bone disabled:text-lead-grey [&[readonly]]:bg-bone';

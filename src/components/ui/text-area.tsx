@@ -38,7 +38,11 @@ export function TextArea({ className, rows = 3, ref, onInput, ...rest }: TextAre
       ref={setRef}
       rows={rows}
       onInput={handleInput}
-      className={joinClasses(CONTROL_CLASS, 'field-sizing-content max-h-[50vh] resize-y leading-normal', className)}
+      className={joinClasses(
+        CONTROL_CLASS,
+        'field-sizing-content min-h-24 max-h-[50vh] resize-y leading-normal',
+        className,
+      )}
     />
   );
 }
