@@ -140,7 +140,7 @@ export function createUploadReceiver({
   return async (req, res) => {
     try {
       await new Promise<void>((resolve, reject) => {
-        read(req, res, (error?: unknown) => (error === undefined || error === null ? resolve() : reject(error)));
+        read(req, res, (error?: unknown) => (error instanceof Error ? reject(error) : resolve()));
       });
     } catch (error) {
       if (isFault(error)) throw error;

@@ -53,8 +53,6 @@ export const ACCEPTED_MEDIA: Readonly<Record<string, MediaFacts>> = {
   },
 };
 
-export const mediaKindOf = (mediaType: string): MediaKind | undefined => ACCEPTED_MEDIA[mediaType]?.kind;
-
 /** Shown in the page itself. The rest, PDF too, is only ever saved: a reader's browser runs none of it in our name. */
 const INLINE = new Set([
   'image/webp',

@@ -8,10 +8,10 @@ import { takeTurns } from './take-turns.ts';
 export type ImageSize = (typeof IMAGE_SIZES)[number];
 
 /** Longest side in pixels. */
-export const LONGEST_SIDE_PX: Readonly<Record<ImageSize, number>> = { thumb: 320, screen: 1280, full: 2560 };
+const LONGEST_SIDE_PX: Readonly<Record<ImageSize, number>> = { thumb: 320, screen: 1280, full: 2560 };
 
 /** Pixels an image may declare; more is refused before anything is decoded. */
-export const INPUT_PIXELS_MAX = 50_000_000;
+const INPUT_PIXELS_MAX = 50_000_000;
 
 const WEBP_QUALITY = 80;
 const DECODE_S = 20;

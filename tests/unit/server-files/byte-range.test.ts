@@ -168,11 +168,12 @@ describe('sendStoredBytes', () => {
   });
 
   it('describes without sending for HEAD, ranges aside, and opens nothing', async () => {
-    using = { ...storage, openRead: vi.fn() };
+    const openRead = vi.fn<ObjectStorage['openRead']>();
+    using = { ...storage, openRead };
     const { response } = await get({ range: 'bytes=0-9' }, '', 'HEAD');
     expect(response.status).toBe(200);
     expect(response.headers.get('content-length')).toBe('1000');
-    expect(using.openRead).not.toHaveBeenCalled();
+    expect(openRead).not.toHaveBeenCalled();
   });
 
   it.each([
