@@ -1,5 +1,11 @@
 import { API_BASE, type AnyRoute, type RouteInput, type RouteOutput } from '../../shared/contracts/route.ts';
-import { PROBLEMS, problemSchema, problemType, type Problem, type ProblemCode } from '../../shared/problems/problems.ts';
+import {
+  PROBLEMS,
+  problemSchema,
+  problemType,
+  type Problem,
+  type ProblemCode,
+} from '../../shared/problems/problems.ts';
 
 /** A refusal as the server tells it (RFC 9457), or one made here when no server answered. */
 export class ApiProblem extends Error {
@@ -44,7 +50,8 @@ export function addressOf<T extends AnyRoute>(route: T, input: RouteInput<T>): s
   const { params = {}, query = {} } = input as AnyInput;
   const path = route.path.replace(/:(\w+)/g, (_whole, name: string) => encodeURIComponent(params[name] ?? ''));
   const search = new URLSearchParams();
-  for (const [name, value] of Object.entries(query)) if (value !== undefined && value !== null) search.set(name, String(value as string | number | boolean));
+  for (const [name, value] of Object.entries(query))
+    if (value !== undefined && value !== null) search.set(name, String(value as string | number | boolean));
   return `${API_BASE}${path}${search.size > 0 ? `?${search.toString()}` : ''}`;
 }
 
@@ -55,7 +62,11 @@ export async function problemOf(response: { json: () => Promise<unknown> }): Pro
 }
 
 /** Calls a route of the contracts and parses its answer by them. Throws `ApiProblem`; it never shows or redirects anything. */
-export async function api<T extends AnyRoute>(route: T, input: RouteInput<T>, options: CallOptions = {}): Promise<RouteOutput<T>> {
+export async function api<T extends AnyRoute>(
+  route: T,
+  input: RouteInput<T>,
+  options: CallOptions = {},
+): Promise<RouteOutput<T>> {
   const { body } = input as AnyInput;
   const response = await fetch(addressOf(route, input), {
     method: route.method,

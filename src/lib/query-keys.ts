@@ -17,24 +17,29 @@ export const keys = {
   legs: { list: (commissionId: string) => [...commission(commissionId), 'legs'] as const },
   joints: {
     lists: (commissionId: string) => [...commission(commissionId), 'joints', 'list'] as const,
-    detail: (commissionId: string, jointId: string) => [...commission(commissionId), 'joints', 'detail', jointId] as const,
+    detail: (commissionId: string, jointId: string) =>
+      [...commission(commissionId), 'joints', 'detail', jointId] as const,
   },
   fitReports: {
     lists: (commissionId: string) => [...commission(commissionId), 'fit-reports', 'list'] as const,
-    detail: (commissionId: string, reportId: string) => [...commission(commissionId), 'fit-reports', 'detail', reportId] as const,
+    detail: (commissionId: string, reportId: string) =>
+      [...commission(commissionId), 'fit-reports', 'detail', reportId] as const,
   },
   consents: { list: (commissionId: string) => [...commission(commissionId), 'consents'] as const },
   handoffs: {
     lists: (commissionId: string) => [...commission(commissionId), 'handoffs', 'list'] as const,
-    detail: (commissionId: string, handoffId: string) => [...commission(commissionId), 'handoffs', 'detail', handoffId] as const,
+    detail: (commissionId: string, handoffId: string) =>
+      [...commission(commissionId), 'handoffs', 'detail', handoffId] as const,
     details: (commissionId: string) => [...commission(commissionId), 'handoffs', 'detail'] as const,
   },
   threads: {
     lists: (commissionId: string) => [...commission(commissionId), 'threads', 'list'] as const,
-    messages: (commissionId: string, threadId: string) => [...commission(commissionId), 'threads', 'messages', threadId] as const,
+    messages: (commissionId: string, threadId: string) =>
+      [...commission(commissionId), 'threads', 'messages', threadId] as const,
   },
   files: {
-    list: (commissionId: string, place: FilePlace, placeId: string) => [...commission(commissionId), 'files', place, placeId] as const,
+    list: (commissionId: string, place: FilePlace, placeId: string) =>
+      [...commission(commissionId), 'files', place, placeId] as const,
   },
   standing: { detail: (commissionId: string) => [...commission(commissionId), 'standing'] as const },
   history: { list: (commissionId: string) => [...commission(commissionId), 'history'] as const },

@@ -25,13 +25,13 @@ export function MetalGradients({ id }: { id: string }) {
         <stop offset="0" className="[stop-color:var(--done-body)]" />
         <stop offset="0.36" className="[stop-color:var(--done-lit)]" />
         <stop offset="0.62" className="[stop-color:var(--done-body)]" />
-        <stop offset="1" className="[stop-color:var(--done-edge)]" stopOpacity="0.85" />
+        <stop offset="1" className="[stop-color:var(--done-shade)]" />
       </linearGradient>
       <linearGradient id={`${id}-under-way`} x1="0" y1="0" x2="0" y2="1">
         <stop offset="0" className="[stop-color:var(--work-body)]" />
         <stop offset="0.36" className="[stop-color:var(--work-lit)]" />
         <stop offset="0.62" className="[stop-color:var(--work-body)]" />
-        <stop offset="1" className="[stop-color:var(--work-edge)]" stopOpacity="0.85" />
+        <stop offset="1" className="[stop-color:var(--work-shade)]" />
       </linearGradient>
       <linearGradient id={`${id}-likely`} x1="0" y1="0" x2="1" y2="0">
         <stop offset="0" className="[stop-color:var(--gun-blue)]" stopOpacity="0.06" />

@@ -12,7 +12,7 @@ export const overlaps = (one: Box, other: Box): boolean =>
   one.y < other.y + other.height &&
   other.y < one.y + one.height;
 
-/** The first place that touches nothing drawn; the last one is the place that was kept free for this case. */
+/** The first place that touches nothing drawn; the last one where all are taken. */
 export function firstFree(places: readonly [Box, ...Box[]], taken: readonly Box[]): Box {
   return places.find((place) => !taken.some((box) => overlaps(place, box))) ?? (places.at(-1) as Box);
 }

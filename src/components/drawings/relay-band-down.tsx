@@ -55,9 +55,9 @@ const SIZES = { ring: 'min-h-10', short: 'min-h-16', middle: 'min-h-24', long: '
 
 const METAL = {
   finished:
-    'border border-done-edge [background-image:linear-gradient(to_right,var(--done-body),var(--done-lit)_36%,var(--done-body)_62%,var(--done-edge))]',
+    'border border-done-edge [background-image:linear-gradient(to_right,var(--done-body),var(--done-lit)_36%,var(--done-body)_62%,var(--done-shade))]',
   'under-way':
-    'border border-work-edge [background-image:linear-gradient(to_right,var(--work-body),var(--work-lit)_36%,var(--work-body)_62%,var(--work-edge))]',
+    'border border-work-edge [background-image:linear-gradient(to_right,var(--work-body),var(--work-lit)_36%,var(--work-body)_62%,var(--work-shade))]',
   planned: 'border border-dashed border-lead-grey bg-vellum',
 };
 

@@ -77,15 +77,17 @@ export function layoutZones(widthPx: number, zeroLine: string, hole: FitSide, sh
     { x: plot.x, y: zeroY - 3, width: plotWidth, height: 6 },
     ...[...holePoints, ...shaftPoints].map(({ x, y }) => ({ x: x - 6, y: y - 6, width: 12, height: 12 })),
   ].filter((box) => box !== null);
-  const place = (text: string, centreX: number, topsY: readonly [number, ...number[]], face: TextFace = 'plain') => {
+  const bottomY = plot.y + plot.height;
+  // Six labels at most, so that one of six rows below the plot is always free.
+  const footRows = [0, 1, 2, 3, 4, 5].map((row) => bottomY + 6 + row * LINE_PX);
+  const place = (text: string, centreX: number, topsY: readonly number[], face: TextFace = 'plain') => {
     const width = textWidthPx(text, ZONE_TEXT_PX, face);
     const x = Math.min(Math.max(centreX - width / 2, plot.x), Math.max(plot.x, plot.x + plotWidth - width));
-    const boxes = topsY.map((y) => ({ x, y, width, height: LINE_PX })) as [Box, ...Box[]];
+    const boxes = [...topsY, ...footRows].map((y) => ({ x, y, width, height: LINE_PX })) as [Box, ...Box[]];
     const box = firstFree(boxes, taken);
     taken.push(box);
     return { text, x: box.x + width / 2, y: box.y + LINE_PX - 4, box };
   };
-  const bottomY = plot.y + plot.height;
   const nearZone = (zone: Box | null, side: FitSide, preferAbove: boolean): PlacedText | null => {
     if (!zone || !side.agreed) return null;
     const above = zone.y - LINE_PX - 2;
@@ -93,7 +95,7 @@ export function layoutZones(widthPx: number, zeroLine: string, hole: FitSide, sh
     return place(
       `${side.name}${widthPx < 480 ? '' : ' agreed'} ${side.agreed.label}`,
       zone.x + zone.width / 2,
-      preferAbove ? [above, below, bottomY + 4] : [below, above, bottomY + 4],
+      preferAbove ? [above, below] : [below, above],
     );
   };
 
@@ -105,16 +107,11 @@ export function layoutZones(widthPx: number, zeroLine: string, hole: FitSide, sh
   const shaftLabel = nearZone(shaftZone, shaft, false);
   const foot = (side: FitSide, from: number, to: number): PlacedText => {
     const { x, width } = across(from, to);
-    const rows: [number, number] = [bottomY + 6, bottomY + 6 + LINE_PX];
-    return place(`${side.name}, ${countOfReadings(side.readingsUm.length)}`, x + width / 2, rows);
+    return place(`${side.name}, ${countOfReadings(side.readingsUm.length)}`, x + width / 2, []);
   };
   const holeReadings = foot(hole, 0.55, 0.77);
   const shaftReadings = foot(shaft, 0.77, 0.99);
-  const zero = place(`zero line ${zeroLine}`, plot.x + plotWidth * 0.24, [
-    zeroY + 5,
-    zeroY - LINE_PX - 3,
-    bottomY + 6 + 2 * LINE_PX,
-  ]);
+  const zero = place(`zero line ${zeroLine}`, plot.x + plotWidth * 0.24, [zeroY + 5, zeroY - LINE_PX - 3]);
 
   const texts = [worstLabel, holeLabel, shaftLabel, holeReadings, shaftReadings, zero].filter((text) => text !== null);
 
@@ -134,7 +131,7 @@ export function layoutZones(widthPx: number, zeroLine: string, hole: FitSide, sh
 }
 
 /** Above the hatched region, below it, else in the row kept free above the plot. */
-const worstTops = (worst: Box, plot: Box): [number, number, number] => [
+const worstTops = (worst: Box, plot: Box): number[] => [
   worst.y - LINE_PX - 4,
   worst.y + worst.height + 4,
   plot.y - LINE_PX - 8,

@@ -11,7 +11,11 @@ export const commissionQueries = {
     infiniteQueryOptions({
       queryKey: [...keys.commissions.lists(), filter] as const,
       queryFn: ({ signal, pageParam }) =>
-        api(contracts.listCommissions, { query: { ...filter, ...(pageParam ? { cursor: pageParam } : {}) } }, { signal }),
+        api(
+          contracts.listCommissions,
+          { query: { ...filter, ...(pageParam ? { cursor: pageParam } : {}) } },
+          { signal },
+        ),
       initialPageParam: '',
       getNextPageParam: (last) => last.nextCursor,
     }),
@@ -44,7 +48,11 @@ export const commissionQueries = {
     infiniteQueryOptions({
       queryKey: keys.history.list(commissionId),
       queryFn: ({ signal, pageParam }) =>
-        api(standing.listMoved, { params: { commissionId }, query: pageParam ? { cursor: pageParam } : {} }, { signal }),
+        api(
+          standing.listMoved,
+          { params: { commissionId }, query: pageParam ? { cursor: pageParam } : {} },
+          { signal },
+        ),
       initialPageParam: '',
       getNextPageParam: (last) => last.nextCursor,
     }),

@@ -17,6 +17,7 @@ export const handoffQueries = {
   effect: (commissionId: string, handoffId: string, onDay: string) =>
     queryOptions({
       queryKey: [...keys.handoffs.detail(commissionId, handoffId), 'effect', onDay] as const,
-      queryFn: ({ signal }) => api(contracts.previewHandoffDay, { params: { commissionId, handoffId }, query: { onDay } }, { signal }),
+      queryFn: ({ signal }) =>
+        api(contracts.previewHandoffDay, { params: { commissionId, handoffId }, query: { onDay } }, { signal }),
     }),
 };

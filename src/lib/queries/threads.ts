@@ -17,6 +17,7 @@ export const fileQueries = {
   list: (commissionId: string, place: FilePlace, placeId: string) =>
     queryOptions({
       queryKey: keys.files.list(commissionId, place, placeId),
-      queryFn: ({ signal }) => api(files.listFiles, { params: { commissionId }, query: { place, placeId } }, { signal }),
+      queryFn: ({ signal }) =>
+        api(files.listFiles, { params: { commissionId }, query: { place, placeId } }, { signal }),
     }),
 };

@@ -1,0 +1,45 @@
+import { useMutation, useQueryClient, type QueryKey } from '@tanstack/react-query';
+import { useRef } from 'react';
+import type { AnyRoute, RouteInput, RouteOutput } from '../../shared/contracts/route.ts';
+import { api, ApiProblem } from '../lib/api.ts';
+
+export interface ActOptions<T extends AnyRoute> {
+  /** Queries that the act makes stale, besides what its realtime event tells. */
+  stale?: (output: RouteOutput<T>) => readonly QueryKey[];
+  onDone?: (output: RouteOutput<T>) => void;
+}
+
+export interface Act<T extends AnyRoute> {
+  run: (input: RouteInput<T>) => void;
+  pending: boolean;
+  problem: ApiProblem | null;
+  forget: () => void;
+}
+
+/**
+ * One act of the API behind a button. A try that failed is sent again under the same idempotency key, so that pressing
+ * twice, or again after a lost connection, does it once.
+ */
+export function useAct<T extends AnyRoute>(route: T, options: ActOptions<T> = {}): Act<T> {
+  const queryClient = useQueryClient();
+  const key = useRef<{ body: string; value: string } | null>(null);
+  const mutation = useMutation<RouteOutput<T>, Error, RouteInput<T>>({
+    mutationFn: (input) => {
+      // Another body is another act: it must not be refused as a reuse of the first one's key.
+      const body = JSON.stringify(input);
+      if (key.current?.body !== body) key.current = { body, value: crypto.randomUUID() };
+      return api(route, input, { idempotencyKey: key.current.value });
+    },
+    onSuccess: async (output) => {
+      key.current = null;
+      await Promise.all((options.stale?.(output) ?? []).map((queryKey) => queryClient.invalidateQueries({ queryKey })));
+      options.onDone?.(output);
+    },
+  });
+  return {
+    run: (input) => mutation.mutate(input),
+    pending: mutation.isPending,
+    problem: mutation.error instanceof ApiProblem ? mutation.error : null,
+    forget: mutation.reset,
+  };
+}
