@@ -60,7 +60,16 @@ describe('contrast of the theme', () => {
     const raw = css.slice(0, css.indexOf('@theme')).match(/#[0-9a-f]{3,8}\b/gi) ?? [];
     expect(raw.length).toBe(tokens.size * 2);
     const checked = new Set([...SURFACES, ...WORDS, ...LINES, 'on-brass', 'on-oxide']);
-    const decoration = ['hairline', 'veil', 'done-body', 'done-lit', 'work-body', 'work-lit'];
+    const decoration = [
+      'hairline',
+      'veil',
+      'done-body',
+      'done-lit',
+      'done-shade',
+      'work-body',
+      'work-lit',
+      'work-shade',
+    ];
     expect([...tokens.keys()].filter((name) => !checked.has(name)).sort()).toEqual(decoration.sort());
   });
 
