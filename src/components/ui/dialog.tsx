@@ -1,4 +1,5 @@
 import { Dialog as RadixDialog } from 'radix-ui';
+import { useRef } from 'react';
 import type { ReactNode } from 'react';
 import { joinClasses } from './join-classes.ts';
 
@@ -19,11 +20,20 @@ export interface DialogProps {
  * Content-Security-Policy refuses; base.css keeps the page behind from scrolling instead.
  */
 export function Dialog({ open, onOpenChange, title, description, actions, width = 'narrow', children }: DialogProps) {
+  const opener = useRef<Element | null>(null);
   return (
     <RadixDialog.Root open={open} onOpenChange={onOpenChange}>
       <RadixDialog.Portal>
         <div data-dialog-backdrop="" className="fixed inset-0 z-40 bg-veil/55" />
         <RadixDialog.Content
+          // The library gives the focus back to a trigger of its own only; ours is whatever was pressed.
+          onOpenAutoFocus={() => {
+            opener.current = document.activeElement;
+          }}
+          onCloseAutoFocus={(event) => {
+            event.preventDefault();
+            focusAgain(opener.current);
+          }}
           {...(description ? {} : { 'aria-describedby': undefined })}
           className={joinClasses(
             'fixed z-50 flex max-h-[calc(100dvh-2rem)] flex-col overflow-y-auto rounded border border-edge bg-vellum px-5 py-5',
@@ -49,4 +59,10 @@ export function Dialog({ open, onOpenChange, title, description, actions, width 
       </RadixDialog.Portal>
     </RadixDialog.Root>
   );
+}
+
+/** What was pressed may be gone, as a row that was answered; then the page itself takes the focus. */
+function focusAgain(opener: Element | null): void {
+  const target = opener?.isConnected ? opener : document.querySelector('main');
+  if (target instanceof HTMLElement) target.focus();
 }

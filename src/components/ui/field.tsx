@@ -27,7 +27,12 @@ export function Field({ label, hint, error, optional, required = false, classNam
     <div className={joinClasses('flex flex-col gap-1.5', className)}>
       <label htmlFor={id} className="text-note font-semibold">
         {label}
-        {optional && <span className="font-normal text-lead-grey"> (optional)</span>}
+        {optional && (
+          <>
+            {' '}
+            <span className="font-normal text-lead-grey">(optional)</span>
+          </>
+        )}
       </label>
       {hint && (
         <p id={hintId} className="text-note text-lead-grey">

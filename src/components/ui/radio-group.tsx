@@ -41,29 +41,34 @@ export function RadioGroup<Value extends string>(props: RadioGroupProps<Value>) 
       )}
       <div className={inRow ? 'flex flex-wrap gap-x-6' : 'flex flex-col'}>
         {options.map((option) => (
-          <label key={option.value} className="flex min-h-thumb items-start gap-3 py-2.5">
-            <input
-              ref={inputRef}
-              type="radio"
-              name={name}
-              value={option.value}
-              disabled={option.disabled}
-              required={required}
-              className="tick mt-px"
-              onBlur={props.onBlur}
-              onChange={(event) => {
-                props.onChange?.(event);
-                onValueChange?.(option.value);
-              }}
-              {...(value === undefined
-                ? { defaultChecked: defaultValue === option.value }
-                : { checked: value === option.value })}
-            />
-            <span className="flex flex-col leading-normal">
-              {option.label}
-              {option.hint && <span className="text-note text-lead-grey">{option.hint}</span>}
-            </span>
-          </label>
+          <div key={option.value}>
+            <label className="flex min-h-thumb items-start gap-3 py-2.5">
+              <input
+                ref={inputRef}
+                type="radio"
+                name={name}
+                value={option.value}
+                disabled={option.disabled}
+                required={required}
+                aria-describedby={option.hint ? `${id}-${option.value}` : undefined}
+                className="tick mt-px"
+                onBlur={props.onBlur}
+                onChange={(event) => {
+                  props.onChange?.(event);
+                  onValueChange?.(option.value);
+                }}
+                {...(value === undefined
+                  ? { defaultChecked: defaultValue === option.value }
+                  : { checked: value === option.value })}
+              />
+              <span className="leading-normal">{option.label}</span>
+            </label>
+            {option.hint && (
+              <p id={`${id}-${option.value}`} className="-mt-1.5 pb-1.5 pl-8.5 text-note text-lead-grey">
+                {option.hint}
+              </p>
+            )}
+          </div>
         ))}
       </div>
       {error && (

@@ -8,10 +8,10 @@ export interface TextAreaProps extends ComponentProps<'textarea'> {
   rows?: number;
 }
 
-const growsByItself = (): boolean => typeof CSS !== 'undefined' && CSS.supports('field-sizing', 'content');
+const growsByItself = (area: HTMLTextAreaElement): boolean => 'fieldSizing' in area.style;
 
 function fitToContent(area: HTMLTextAreaElement): void {
-  if (growsByItself()) return;
+  if (growsByItself(area)) return;
   area.style.height = 'auto';
   area.style.height = `${area.scrollHeight + 2}px`;
 }

@@ -1,0 +1,71 @@
+import type { Socket } from 'socket.io-client';
+import { PRESENCE_EVENT, REALTIME_EVENTS, type Acknowledgement, type ClientEventName, type ClientEvents, type RealtimeEvents, type RealtimeName, type ThreadPresence } from '../../shared/realtime/events.ts';
+
+type Listener<T> = (value: T) => void;
+
+const events = new Map<RealtimeName, Set<Listener<never>>>();
+const connected = new Set<() => void>();
+const states = new Set<Listener<boolean>>();
+const presence = new Set<Listener<ThreadPresence>>();
+let socket: Socket | null = null;
+let isUp = false;
+
+const setUp = (up: boolean): void => {
+  isUp = up;
+  for (const listener of states) listener(up);
+};
+
+/** Opens the one connection of this page; the library is loaded only then. Calling again does nothing. */
+export async function openRealtime(): Promise<void> {
+  if (socket) return;
+  const { io } = await import('socket.io-client');
+  if (socket) return;
+  // The server's own jitter: a restart must not bring every browser back in the same instant.
+  const made = io({ transports: ['websocket'], reconnectionDelay: 500, reconnectionDelayMax: 8000, randomizationFactor: 0.6 });
+  socket = made;
+  made.on('connect', () => {
+    setUp(true);
+    for (const listener of connected) listener();
+  });
+  made.on('disconnect', () => setUp(false));
+  made.on('connect_error', () => setUp(false));
+  made.onAny((name: string, payload: unknown) => {
+    if (name === PRESENCE_EVENT) for (const listener of presence) listener(payload as ThreadPresence);
+    else if (name in REALTIME_EVENTS) for (const listener of events.get(name as RealtimeName) ?? []) (listener as Listener<unknown>)(payload);
+  });
+}
+
+/** Ends the connection, at sign-out: another person may sign in on this page. */
+export function closeRealtime(): void {
+  socket?.disconnect();
+  socket = null;
+  setUp(false);
+}
+
+const subscribe = <T>(listeners: Set<T>, listener: T): (() => void) => {
+  listeners.add(listener);
+  return () => void listeners.delete(listener);
+};
+
+export function onRealtime<N extends RealtimeName>(name: N, listener: Listener<RealtimeEvents[N]>): () => void {
+  const listeners = (events.get(name) ?? new Set()) as unknown as Set<Listener<RealtimeEvents[N]>>;
+  events.set(name, listeners as unknown as Set<Listener<never>>);
+  return subscribe(listeners, listener);
+}
+
+/** Called at each connect: what happened in between was not heard and has to be asked for. */
+export const onConnected = (listener: () => void): (() => void) => subscribe(connected, listener);
+
+export const onPresence = (listener: Listener<ThreadPresence>): (() => void) => subscribe(presence, listener);
+
+/** For `useSyncExternalStore`: whether the connection is up. */
+export const connectionState = {
+  subscribe: (listener: () => void): (() => void) => subscribe(states, listener as Listener<boolean>),
+  get: (): boolean => isUp,
+};
+
+/** Tells the server something that lives only as long as the connection does; without one it is dropped. */
+export async function tell<N extends ClientEventName>(name: N, event: ClientEvents[N]): Promise<Acknowledgement> {
+  if (!socket?.connected) return { ok: false, code: 'not-connected' };
+  return (await socket.timeout(5000).emitWithAck(name, event).catch(() => ({ ok: false, code: 'not-answered' }))) as Acknowledgement;
+}
