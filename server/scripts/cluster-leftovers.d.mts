@@ -20,7 +20,7 @@ export function readPostmaster(dataFolder: string): ReturnType<typeof parsePostm
 export function livingPostmaster(dataFolder: string): ReturnType<typeof parsePostmaster> | null;
 /**
  * Ends a server that an earlier run left behind, waits for orphaned backends, and removes a postmaster.pid whose number
- * meanwhile belongs to a stranger (which PostgreSQL itself would take for a running server).
+ * belongs to a stranger or to a dead process that nobody has reaped: PostgreSQL takes both for a running server.
  * @param {string} dataFolder
  * @throws {Halt} when something still works on the data: starting then would damage it
  */

@@ -27,6 +27,6 @@ export async function installDebianPackage(scope, name, missing) {
     return scope.run(command ?? 'apt-get', rest, { stdio: ['ignore', 'ignore', 'inherit'] });
   };
   const updated = await apt('update');
-  const installed = await apt('install', '-y', '--no-install-recommends', name);
+  const installed = await apt('install', '-y', '--no-install-recommends', '--no-upgrade', name);
   if (updated !== 0 || installed !== 0) throw new Halt(`${missing} could not be installed. ${remedy}`);
 }

@@ -8,7 +8,7 @@ import { Halt, say } from './halt.mjs';
 import { choosePort, isFree } from './ports.mjs';
 import { prepareRun } from './prepared-run.mjs';
 import { endChild, runCommand } from './scope.mjs';
-import { startServer, waitHealthy } from './server-process.mjs';
+import { startServer, waitForAnswer, waitHealthy } from './server-process.mjs';
 
 const FIRST_WEB_PORT = 5173;
 /** The first start compiles everything. */
@@ -38,6 +38,7 @@ await runCommand(async (scope) => {
     },
   );
   scope.add(() => endChild(pages, { graceMs: 5000 }));
+  await waitForAnswer(pages, `${origin}/`);
   lock.setNote(`for development at ${origin}, process ${process.pid}`);
   say(`\nFerrule for development: ${origin} (API at ${apiOrigin})\n`);
   if (signIns) say(`Demo sign-ins:\n${signIns}\n`);

@@ -34,6 +34,18 @@ export function waitHealthy(
   origin: string,
   limitMs?: number,
 ): Promise<void>;
+/**
+ * Waits until a child answers at an address with a success.
+ * @param {import('node:child_process').ChildProcess} child
+ * @param {string} url
+ * @param {number} [limitMs]
+ * @throws {Halt} when it ends first or takes too long
+ */
+export function waitForAnswer(
+  child: import('node:child_process').ChildProcess,
+  url: string,
+  limitMs?: number,
+): Promise<void>;
 /** What Node needs to run the server's TypeScript. */
 export const TSX: string[];
 export function withTsx(env: Record<string, string | undefined>): {

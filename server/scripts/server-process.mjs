@@ -69,14 +69,23 @@ export async function endEarlierServer(folder) {
  * @param {number} [limitMs]
  */
 export async function waitHealthy(child, origin, limitMs = READY_LIMIT_MS) {
+  for (const path of ['/healthz', '/readyz']) await waitForAnswer(child, `${origin}${path}`, limitMs);
+}
+
+/**
+ * Waits until a child answers at an address with a success.
+ * @param {import('node:child_process').ChildProcess} child
+ * @param {string} url
+ * @param {number} [limitMs]
+ * @throws {Halt} when it ends first or takes too long
+ */
+export async function waitForAnswer(child, url, limitMs = READY_LIMIT_MS) {
   const end = Date.now() + limitMs;
-  for (const path of ['/healthz', '/readyz']) {
-    while (!(await answers(`${origin}${path}`))) {
-      if (hasEnded(child))
-        throw new Halt('The application ended while starting: see its message above. Nothing that was saved is lost.');
-      if (Date.now() > end) throw new Halt(`The application did not answer ${path} within ${limitMs / 1000} s.`);
-      await pause(100);
-    }
+  while (!(await answers(url))) {
+    if (hasEnded(child))
+      throw new Halt('The application ended while starting: see its message above. Nothing that was saved is lost.');
+    if (Date.now() > end) throw new Halt(`Nothing answered at ${url} within ${limitMs / 1000} s.`);
+    await pause(100);
   }
 }
 
