@@ -77,7 +77,11 @@ export class Api {
     return { ...open, ...known, ability: abilityFor(known.actor), todayIso: dayIn(known.person.timeZone, open.now) };
   }
 
-  async #answerKeyed<T extends AnyRoute>(route: T, ctx: RequestContext, handle: Handler<RequestContext, T>): Promise<void> {
+  async #answerKeyed<T extends AnyRoute>(
+    route: T,
+    ctx: RequestContext,
+    handle: Handler<RequestContext, T>,
+  ): Promise<void> {
     const key = readIdempotencyKey(ctx.req.get('idempotency-key'));
     const input = parseInput(route, ctx.req);
     const hash = hashRequest(route.method, ctx.req.originalUrl, input.body);

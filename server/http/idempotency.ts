@@ -11,18 +11,28 @@ export interface KeptAnswer {
 
 export function readIdempotencyKey(header: string | undefined): string {
   if (!header || !KEY_FORM.test(header))
-    throw new AppError('idempotency-key-missing', 'Send an Idempotency-Key header of 8 to 128 visible characters, new for each act.');
+    throw new AppError(
+      'idempotency-key-missing',
+      'Send an Idempotency-Key header of 8 to 128 visible characters, new for each act.',
+    );
   return header;
 }
 
 export const hashRequest = (method: string, url: string, body: unknown): string =>
-  createHash('sha256').update(`${method} ${url}\n${JSON.stringify(body)}`).digest('hex');
+  createHash('sha256')
+    .update(`${method} ${url}\n${JSON.stringify(body)}`)
+    .digest('hex');
 
 /**
  * Claims a key inside the transaction that does the work. A second request with the same key waits for the first one's
  * commit and then gets its answer; a first one that fails leaves no trace, so the key can be tried again.
  */
-export async function claimKey(manager: EntityManager, accountId: string, key: string, requestHash: string): Promise<KeptAnswer | null> {
+export async function claimKey(
+  manager: EntityManager,
+  accountId: string,
+  key: string,
+  requestHash: string,
+): Promise<KeptAnswer | null> {
   const claimed = await manager.query<unknown[]>(
     `INSERT INTO "idempotency_key" ("account_id", "key", "request_hash") VALUES ($1, $2, $3)
      ON CONFLICT ("account_id", "key") DO NOTHING RETURNING 1`,
@@ -34,11 +44,19 @@ export async function claimKey(manager: EntityManager, accountId: string, key: s
     [accountId, key],
   );
   if (kept?.request_hash !== requestHash)
-    throw new AppError('idempotency-key-reused', 'This key belongs to another request. Nothing was done; use a new key.');
+    throw new AppError(
+      'idempotency-key-reused',
+      'This key belongs to another request. Nothing was done; use a new key.',
+    );
   return { status: kept.status, response: kept.response };
 }
 
-export async function keepAnswer(manager: EntityManager, accountId: string, key: string, answer: KeptAnswer): Promise<void> {
+export async function keepAnswer(
+  manager: EntityManager,
+  accountId: string,
+  key: string,
+  answer: KeptAnswer,
+): Promise<void> {
   await manager.query(
     `UPDATE "idempotency_key" SET "status" = $3, "response" = $4::jsonb WHERE "account_id" = $1 AND "key" = $2`,
     [accountId, key, answer.status, JSON.stringify(answer.response)],

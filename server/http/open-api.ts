@@ -16,7 +16,11 @@ function responsesOf(route: AnyRoute): Record<string, object> {
     : route.status === 204
       ? { description: 'Done' }
       : { description: 'The answer', content: { 'application/json': { schema: route.response } } };
-  const codes = [...route.problems, 'input-invalid' as const, ...(route.access === 'signed-in' ? (['not-signed-in'] as const) : [])];
+  const codes = [
+    ...route.problems,
+    'input-invalid' as const,
+    ...(route.access === 'signed-in' ? (['not-signed-in'] as const) : []),
+  ];
   const byStatus = new Map<number, Set<string>>();
   for (const code of codes) {
     const { status } = PROBLEMS[code];
@@ -24,7 +28,10 @@ function responsesOf(route: AnyRoute): Record<string, object> {
   }
   const refusals: Record<string, object> = {};
   for (const [status, group] of byStatus)
-    refusals[status] = { description: [...group].join(', '), content: { 'application/problem+json': { schema: problemSchema } } };
+    refusals[status] = {
+      description: [...group].join(', '),
+      content: { 'application/problem+json': { schema: problemSchema } },
+    };
   return { [route.status]: good, ...refusals };
 }
 
@@ -45,7 +52,13 @@ function build(): Document {
         ...(route.keyed ? { headers: z.object({ 'idempotency-key': z.string().min(8).max(128) }) } : {}),
         ...(route.method === 'GET' || route.method === 'DELETE'
           ? {}
-          : { body: { content: { [route.multipart ? 'multipart/form-data' : 'application/json']: { schema: route.body as z.ZodObject } } } }),
+          : {
+              body: {
+                content: {
+                  [route.multipart ? 'multipart/form-data' : 'application/json']: { schema: route.body as z.ZodObject },
+                },
+              },
+            }),
       },
       responses: responsesOf(route),
     });

@@ -39,7 +39,13 @@ export class Hub {
       transports: ['websocket'],
       maxHttpBufferSize: 64 * 1024,
       allowRequest: (req, done) =>
-        done(null, comesFromOwnOrigin({ origin: req.headers.origin, fetchSite: req.headers['sec-fetch-site'] as string | undefined }, PUBLIC_ORIGIN)),
+        done(
+          null,
+          comesFromOwnOrigin(
+            { origin: req.headers.origin, fetchSite: req.headers['sec-fetch-site'] as string | undefined },
+            PUBLIC_ORIGIN,
+          ),
+        ),
     });
     this.io.engine.use(session);
     this.io.use((socket, next) => void this.#admit(socket as unknown as AppSocket, next));
@@ -81,7 +87,8 @@ export class Hub {
     // The handshake request is of no more use, and it is most of an idle connection's memory.
     (socket.conn as unknown as { request: unknown }).request = undefined;
     this.#on(socket, 'thread.enter', async ({ commissionId, threadId }) => {
-      if (!(await mayReadThread(this.#services.db.manager, socket.data.accountId, commissionId, threadId))) return 'not-found';
+      if (!(await mayReadThread(this.#services.db.manager, socket.data.accountId, commissionId, threadId)))
+        return 'not-found';
       await socket.join(threadRoom(threadId));
       this.#presence.enter(threadId, socket.id, socket.data);
       this.#tellPresence(threadId);
