@@ -1,0 +1,34 @@
+import type { Request } from 'express';
+import type { EntityManager } from 'typeorm';
+
+/** A new session id for the same browser, so that an id known before sign-in is worth nothing after it. */
+const regenerate = (req: Request): Promise<void> =>
+  new Promise((resolve, reject) => req.session.regenerate((error: unknown) => (error ? reject(error as Error) : resolve())));
+
+const save = (req: Request): Promise<void> =>
+  new Promise((resolve, reject) => req.session.save((error: unknown) => (error ? reject(error as Error) : resolve())));
+
+export async function openSession(req: Request, accountId: string, now: Date): Promise<void> {
+  await regenerate(req);
+  req.session.accountId = accountId;
+  req.session.signedInAt = now.getTime();
+  await save(req);
+}
+
+/** The password was right; the second factor is still asked for, for ten minutes. */
+export async function openPendingSession(req: Request, accountId: string, now: Date): Promise<void> {
+  await regenerate(req);
+  req.session.pendingAccountId = accountId;
+  req.session.pendingSince = now.getTime();
+  await save(req);
+}
+
+export const closeSession = (req: Request): Promise<void> =>
+  new Promise((resolve, reject) => req.session.destroy((error: unknown) => (error ? reject(error as Error) : resolve())));
+
+/** Ends an account's sessions on every device. @param exceptSid one that stays */
+export const endSessionsOf = (manager: EntityManager, accountId: string, exceptSid: string | null = null): Promise<unknown> =>
+  manager.query(
+    `DELETE FROM "web_session" WHERE ("sess"->>'accountId' = $1 OR "sess"->>'pendingAccountId' = $1) AND ($2::text IS NULL OR "sid" <> $2)`,
+    [accountId, exceptSid],
+  );
