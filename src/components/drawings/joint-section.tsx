@@ -59,14 +59,14 @@ export function JointSection({ title, holeName, shaftName, formatLength = format
         to={layout.axisY + layout.holeR}
         at={layout.sleeveX - 24}
         extendFrom={layout.sleeveX}
-        words={`⌀ ${formatLength(input.holeDiameterMm)}`}
+        words={`Ø ${formatLength(input.holeDiameterMm)}`}
       />
       <DiameterDimension
         from={layout.axisY - layout.shaftR}
         to={layout.axisY + layout.shaftR}
         at={layout.endX + 40}
         extendFrom={layout.shoulderX}
-        words={`⌀ ${formatLength(input.shaftDiameterMm)}`}
+        words={`Ø ${formatLength(input.shaftDiameterMm)}`}
       />
       <LengthDimension
         from={layout.freeEndX}

@@ -40,7 +40,7 @@ export interface SectionLayout {
   removal: { from: 'hole' | 'shaft'; depth: number; fromX: number; toX: number } | null;
 }
 
-const TOP_PX = 40;
+const TOP_PX = 46;
 const BOTTOM_PX = 64;
 const SIDE_PX = 84;
 const MAX_HALF_PX = 165;

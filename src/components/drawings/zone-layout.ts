@@ -101,7 +101,12 @@ export function layoutZones(widthPx: number, zeroLine: string, hole: FitSide, sh
 
   const worstLabel =
     pair && worst
-      ? place(`worst pair: ${worstPairInWords(pair)}`, worst.x + worst.width / 2, worstTops(worst, plot), 'bold')
+      ? place(
+          `worst${widthPx < 340 ? '' : ' pair'}: ${worstPairInWords(pair)}`,
+          worst.x + worst.width / 2,
+          worstTops(worst, plot),
+          'bold',
+        )
       : null;
   const holeLabel = nearZone(holeZone, hole, true);
   const shaftLabel = nearZone(shaftZone, shaft, false);

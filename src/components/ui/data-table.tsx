@@ -55,7 +55,7 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
                 scope="col"
                 aria-sort={column.sortable ? (sort?.key === column.key ? sort.direction : 'none') : undefined}
                 className={joinClasses(
-                  'border-b border-edge px-2 align-bottom font-normal text-lead-grey stamped',
+                  'border-b border-edge px-2 align-middle font-normal text-lead-grey stamped',
                   column.align === 'right' ? 'text-right' : 'text-left',
                   column.sortable ? 'py-0' : 'py-1.5',
                 )}

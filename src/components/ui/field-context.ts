@@ -28,5 +28,9 @@ export function useFieldWiring(own: ControlWiring): ControlWiring {
   };
 }
 
-export const CONTROL_CLASS =
-  'w-full min-h-thumb rounded border border-edge bg-vellum px-3 py-2 text-body text-soot hover:border-soot aria-invalid:border-oxide aria-invalid:border-2 disabled:bg-bone disabled:text-lead-grey [&[readonly]]:bg-bone';
+/** Looks of a control without its height, for one that grows. */
+export const CONTROL_FACE =
+  'w-full rounded border border-edge bg-vellum px-3 py-2 text-body text-soot hover:border-soot aria-invalid:border-oxide aria-invalid:border-2 disabled:bg-bone disabled:text-lead-grey [&[readonly]]:bg-bone';
+
+/** Looks of a control of one line, as tall as a thumb needs. */
+export const CONTROL_CLASS = `${CONTROL_FACE} min-h-thumb`;

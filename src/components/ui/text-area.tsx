@@ -1,6 +1,6 @@
 import { useLayoutEffect, useRef } from 'react';
 import type { ComponentProps, FormEvent, Ref } from 'react';
-import { CONTROL_CLASS, useFieldWiring } from './field-context.ts';
+import { CONTROL_FACE, useFieldWiring } from './field-context.ts';
 import { joinClasses } from './join-classes.ts';
 
 export interface TextAreaProps extends ComponentProps<'textarea'> {
@@ -39,7 +39,7 @@ export function TextArea({ className, rows = 3, ref, onInput, ...rest }: TextAre
       rows={rows}
       onInput={handleInput}
       className={joinClasses(
-        CONTROL_CLASS,
+        CONTROL_FACE,
         'field-sizing-content min-h-24 max-h-[50vh] resize-y leading-normal',
         className,
       )}

@@ -21,7 +21,7 @@ export interface TopStripProps {
   person?: ReactNode;
 }
 
-/** Name, places, search, notices, person. On a phone: name and one button that opens the rest. */
+/** Name, places, search, notices, person. On a phone or tablet: name and one button that opens the rest. */
 export function TopStrip({ homeLink, nav, search, notices, person }: TopStripProps) {
   const [open, setOpen] = useState(false);
   const panelId = useId();
@@ -35,7 +35,7 @@ export function TopStrip({ homeLink, nav, search, notices, person }: TopStripPro
   return (
     <header className="border-b border-hairline bg-vellum print:hidden" onKeyDown={handleKeyDown}>
       <div
-        className="mx-auto flex max-w-page flex-wrap items-center gap-x-6 px-4 md:flex-nowrap md:px-7"
+        className="mx-auto flex max-w-page flex-wrap items-center gap-x-6 px-4 lg:flex-nowrap md:px-7"
         onClick={closeAfterLink}
       >
         <div className="flex min-h-14 flex-none items-center">
@@ -52,7 +52,7 @@ export function TopStrip({ homeLink, nav, search, notices, person }: TopStripPro
             aria-expanded={open}
             aria-controls={panelId}
             onClick={() => setOpen(!open)}
-            className="-mr-2 ml-auto min-h-thumb px-2 font-semibold md:hidden"
+            className="-mr-2 ml-auto min-h-thumb px-2 font-semibold lg:hidden"
           >
             {open ? 'Close' : 'Menu'}
           </button>
@@ -60,17 +60,17 @@ export function TopStrip({ homeLink, nav, search, notices, person }: TopStripPro
         <div
           id={panelId}
           className={joinClasses(
-            'w-full flex-col gap-3 pb-4 md:flex md:min-w-0 md:flex-row md:items-center md:gap-6 md:py-2 md:pb-2',
+            'w-full flex-col gap-3 pb-4 lg:flex lg:min-w-0 lg:flex-row lg:items-center lg:gap-6 lg:py-2 lg:pb-2',
             open ? 'flex' : 'hidden',
           )}
         >
           {nav && (
-            <nav aria-label="Places" className="flex flex-col md:flex-row md:gap-6">
+            <nav aria-label="Places" className="flex flex-col lg:flex-row lg:gap-6">
               {nav}
             </nav>
           )}
-          {search && <div className="md:max-w-md md:min-w-40 md:flex-1">{search}</div>}
-          <div className="flex items-center justify-between gap-6 md:ml-auto">
+          {search && <div className="lg:max-w-md lg:min-w-40 lg:flex-1">{search}</div>}
+          <div className="flex items-center justify-between gap-6 lg:ml-auto">
             {notices}
             {person}
           </div>
