@@ -1,4 +1,5 @@
 import type { Api } from '../http/api.ts';
+import { mountAccounts } from './accounts.ts';
 import { mountBench } from './bench.ts';
 import { mountCommissions } from './commissions.ts';
 import { mountFitReports } from './fit-reports.ts';
@@ -6,10 +7,13 @@ import { mountHandoffs } from './handoffs.ts';
 import { mountJoints } from './joints.ts';
 import { mountParties } from './parties.ts';
 import { mountPartsAndLegs } from './parts-and-legs.ts';
+import { mountShops } from './shops.ts';
 import { mountStanding } from './standing.ts';
 
 /** Mounts every resource. A contract that no file here mounts fails the start-up test. */
 export function mountAll(api: Api): void {
+  mountAccounts(api);
+  mountShops(api);
   mountCommissions(api);
   mountParties(api);
   mountPartsAndLegs(api);
