@@ -11,28 +11,37 @@ let running = 0;
 const waiting: (() => void)[] = [];
 
 async function inTurn<T>(work: () => Promise<T>): Promise<T> {
-  if (running >= AT_ONCE) {
-    if (waiting.length >= QUEUE) throw new AppError('busy', 'Many people are signing in just now. Try again in a moment.', { retryAfterS: 3 });
+  if (running < AT_ONCE) running += 1;
+  else {
+    if (waiting.length >= QUEUE)
+      throw new AppError('busy', 'Many people are signing in just now. Try again in a moment.', { retryAfterS: 3 });
+    // The one who finishes hands its place on, so that nobody who comes later slips in between.
     await new Promise<void>((resolve) => waiting.push(resolve));
   }
-  running += 1;
   try {
     return await work();
   } finally {
-    running -= 1;
-    waiting.shift()?.();
+    const next = waiting.shift();
+    if (next) next();
+    else running -= 1;
   }
 }
 
-/** Argon2id in PHC string form. */
-export const hashPassword = (password: string): Promise<string> => inTurn(() => hash(password, ARGON2));
+/** One keyboard writes é as one character and another as two: both must open (NIST SP 800-63B-4 asks for this). */
+const normal = (password: string): string => password.normalize('NFKC');
+
+/** Argon2id in PHC string form. @throws AppError `busy` when too many hashes wait */
+export const hashPassword = (password: string): Promise<string> => inTurn(() => hash(normal(password), ARGON2));
 
 /** Hash of a password nobody has, so that an account that is not there takes as long to refuse as one that is. */
 const nobodysHash = hash('no account has this password', ARGON2);
 
-/** @param passwordHash null where there is no such account: the work is done all the same, and the answer is no. */
+/**
+ * @param passwordHash null where there is no such account: the work is done all the same, and the answer is no
+ * @throws AppError `busy` when too many hashes wait
+ */
 export async function verifyPassword(passwordHash: string | null, password: string): Promise<boolean> {
   const against = passwordHash ?? (await nobodysHash);
-  const right = await inTurn(() => verify(against, password));
+  const right = await inTurn(() => verify(against, normal(password)));
   return right && passwordHash !== null;
 }

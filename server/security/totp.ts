@@ -8,16 +8,29 @@ const PERIOD_S = 30;
 export const newTotpSecret = (): string => generateSecret({ length: 20 });
 
 /** Address for an authenticator's QR code. */
-export const totpUri = (secret: string, label: string): string => generateURI({ issuer: 'Ferrule', label, secret, digits: 6, period: PERIOD_S });
+export const totpUri = (secret: string, label: string): string =>
+  generateURI({ issuer: 'Ferrule', label, secret, digits: 6, period: PERIOD_S });
 
 /**
  * The time step of a right code, or null (RFC 6238, SHA-1, 30 s). One step before and after is taken, for clocks that are
  * a little off.
  * @param digits 6 in the product; the RFC's test vectors have 8
  */
-export async function totpStepOf(secret: string, code: string, epochS: number, digits: 6 | 8 = 6): Promise<number | null> {
+export async function totpStepOf(
+  secret: string,
+  code: string,
+  epochS: number,
+  digits: 6 | 8 = 6,
+): Promise<number | null> {
   if (!new RegExp(`^\\d{${digits}}$`).test(code)) return null;
-  const result = await verify({ secret, token: code, epoch: epochS, epochTolerance: PERIOD_S, period: PERIOD_S, digits });
+  const result = await verify({
+    secret,
+    token: code,
+    epoch: epochS,
+    epochTolerance: PERIOD_S,
+    period: PERIOD_S,
+    digits,
+  });
   return result.valid && 'timeStep' in result ? result.timeStep : null;
 }
 
@@ -30,4 +43,5 @@ export const newRecoveryCode = (): string => {
 };
 
 /** As it is hashed: upper case, without hyphens and spaces, look-alikes read as digits. */
-export const plainRecoveryCode = (typed: string): string => typed.toUpperCase().replace(/[\s-]/g, '').replace(/[IL]/g, '1').replace(/O/g, '0');
+export const plainRecoveryCode = (typed: string): string =>
+  typed.toUpperCase().replace(/[\s-]/g, '').replace(/[IL]/g, '1').replace(/O/g, '0');
