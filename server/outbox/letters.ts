@@ -9,4 +9,6 @@ export type Letter =
       commissionTitle: string;
       roles: string[];
       token: string;
-    };
+    }
+  /** Nothing is sent: the row that takes the place of a letter, so that an answer takes as long without an account. */
+  | { letter: 'none'; to: string };

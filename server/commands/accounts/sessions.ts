@@ -3,7 +3,9 @@ import type { EntityManager } from 'typeorm';
 
 /** A new session id for the same browser, so that an id known before sign-in is worth nothing after it. */
 const regenerate = (req: Request): Promise<void> =>
-  new Promise((resolve, reject) => req.session.regenerate((error: unknown) => (error ? reject(error as Error) : resolve())));
+  new Promise((resolve, reject) =>
+    req.session.regenerate((error: unknown) => (error ? reject(error as Error) : resolve())),
+  );
 
 const save = (req: Request): Promise<void> =>
   new Promise((resolve, reject) => req.session.save((error: unknown) => (error ? reject(error as Error) : resolve())));
@@ -24,11 +26,12 @@ export async function openPendingSession(req: Request, accountId: string, now: D
 }
 
 export const closeSession = (req: Request): Promise<void> =>
-  new Promise((resolve, reject) => req.session.destroy((error: unknown) => (error ? reject(error as Error) : resolve())));
-
-/** Ends an account's sessions on every device. @param exceptSid one that stays */
-export const endSessionsOf = (manager: EntityManager, accountId: string, exceptSid: string | null = null): Promise<unknown> =>
-  manager.query(
-    `DELETE FROM "web_session" WHERE ("sess"->>'accountId' = $1 OR "sess"->>'pendingAccountId' = $1) AND ($2::text IS NULL OR "sid" <> $2)`,
-    [accountId, exceptSid],
+  new Promise((resolve, reject) =>
+    req.session.destroy((error: unknown) => (error ? reject(error as Error) : resolve())),
   );
+
+/** Ends an account's sessions on every device, those that still wait for the second factor too. */
+export const endSessionsOf = (manager: EntityManager, accountId: string): Promise<unknown> =>
+  manager.query(`DELETE FROM "web_session" WHERE "sess"->>'accountId' = $1 OR "sess"->>'pendingAccountId' = $1`, [
+    accountId,
+  ]);

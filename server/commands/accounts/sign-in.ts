@@ -20,7 +20,11 @@ export async function signIn(ctx: OpenContext, { body }: ParsedInput<typeof cont
   await limits.take('sign-in-pair', pair);
   const facts = await loadSignInFacts(ctx.manager, { email: body.email });
   const right = await verifyPassword(facts?.passwordHash ?? null, body.password);
-  if (!right || !facts) throw new AppError('credentials-refused', 'E-mail and password do not go together. Check both, or ask for a new password.');
+  if (!right || !facts)
+    throw new AppError(
+      'credentials-refused',
+      'E-mail and password do not go together. Check both, or ask for a new password.',
+    );
   await limits.forget('sign-in-pair', pair);
   if (facts.secondFactor) {
     await openPendingSession(ctx.req, facts.id, ctx.now);
@@ -30,12 +34,19 @@ export async function signIn(ctx: OpenContext, { body }: ParsedInput<typeof cont
   return { next: 'done' };
 }
 
-export async function giveSecondFactor(ctx: OpenContext, { body }: ParsedInput<typeof factorContract>): Promise<SignedIn> {
+export async function giveSecondFactor(
+  ctx: OpenContext,
+  { body }: ParsedInput<typeof factorContract>,
+): Promise<SignedIn> {
   const { pendingAccountId, pendingSince } = ctx.req.session;
   if (!pendingAccountId || !pendingSince || ctx.now.getTime() - pendingSince > PENDING_MS)
     throw new AppError('credentials-refused', 'This sign-in has run out. Begin again with your password.');
   await ctx.services.limits.take('second-factor', pendingAccountId);
-  if (!(await takeSecondFactor(ctx, pendingAccountId, body.code))) throw new AppError('credentials-refused', 'This code is not right, or was used already. Wait for the next one and try again.');
+  if (!(await takeSecondFactor(ctx, pendingAccountId, body.code)))
+    throw new AppError(
+      'credentials-refused',
+      'This code is not right, or was used already. Wait for the next one and try again.',
+    );
   await ctx.services.limits.forget('second-factor', pendingAccountId);
   await openSession(ctx.req, pendingAccountId, ctx.now);
   return { next: 'done' };

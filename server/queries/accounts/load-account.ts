@@ -48,7 +48,10 @@ export interface SignInFacts {
 }
 
 /** What a sign-in needs to know, by address or id. */
-export async function loadSignInFacts(manager: EntityManager, by: { email: string } | { id: string }): Promise<SignInFacts | null> {
+export async function loadSignInFacts(
+  manager: EntityManager,
+  by: { email: string } | { id: string },
+): Promise<SignInFacts | null> {
   const [row] = await manager.query<SignInFacts[]>(
     `SELECT "id", "display_name" AS "displayName", "email", "password_hash" AS "passwordHash", "totp_confirmed_at" IS NOT NULL AS "secondFactor"
      FROM "account" WHERE ${'email' in by ? '"email"' : '"id"'} = $1`,
