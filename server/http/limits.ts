@@ -1,14 +1,24 @@
+import { createHash } from 'node:crypto';
 import { RateLimiterPostgres, RateLimiterRes } from 'rate-limiter-flexible';
 import type { DataSource } from 'typeorm';
 import { poolOf } from '../db/data-source.ts';
 import { AppError } from '../errors.ts';
 
+interface DoorPlan {
+  readonly points: number;
+  readonly durationS: number;
+  /** How long a key waits once its tries are used up; 0: until the window ends. */
+  readonly blockS: number;
+  /** Each further wait within a day is twice as long, up to this. */
+  readonly growsToS?: number;
+}
+
 /** Tries in a window, per key, counted in PostgreSQL so that every process shares them. */
 const DOORS = {
   /** Wrong passwords for one account from one address; a stranger elsewhere cannot lock the owner out. */
-  'sign-in-pair': { points: 5, durationS: 15 * 60, blockS: 60 },
+  'sign-in-pair': { points: 5, durationS: 15 * 60, blockS: 60, growsToS: 60 * 60 },
   'sign-in-address': { points: 60, durationS: 15 * 60, blockS: 5 * 60 },
-  'second-factor': { points: 5, durationS: 15 * 60, blockS: 5 * 60 },
+  'second-factor': { points: 5, durationS: 15 * 60, blockS: 5 * 60, growsToS: 60 * 60 },
   'reset-email': { points: 3, durationS: 60 * 60, blockS: 0 },
   'reset-address': { points: 20, durationS: 60 * 60, blockS: 0 },
   link: { points: 30, durationS: 15 * 60, blockS: 60 },
@@ -16,7 +26,7 @@ const DOORS = {
   password: { points: 10, durationS: 15 * 60, blockS: 60 },
   /** Any unsafe request of one account. */
   write: { points: 600, durationS: 60, blockS: 0 },
-} as const;
+} as const satisfies Record<string, DoorPlan>;
 
 export type Door = keyof typeof DOORS;
 
@@ -27,36 +37,59 @@ export interface Limits {
   forget(door: Door, key: string): Promise<void>;
 }
 
+const ONE_DAY_S = 24 * 60 * 60;
+
+/** Keys hold addresses of people: the table gets their hash, which also keeps a long one within its column. */
+const hidden = (key: string): string => createHash('sha256').update(key).digest('base64url');
+
 /** @param factor multiplies every allowance; browser tests sign in far more often than people. */
 export function createLimits(db: DataSource, factor = 1): Limits {
-  const limiters = Object.fromEntries(
-    Object.entries(DOORS).map(([door, { points, durationS, blockS }]) => [
-      door,
-      new RateLimiterPostgres({
-        storeClient: poolOf(db),
-        storeType: 'pool',
-        tableName: 'rate_limit',
-        tableCreated: true,
-        clearExpiredByTimeout: false,
-        keyPrefix: door,
-        points: points * factor,
-        duration: durationS,
-        blockDuration: blockS,
-      }),
-    ]),
-  ) as Record<Door, RateLimiterPostgres>;
+  const limiter = (keyPrefix: string, points: number, durationS: number, blockS: number): RateLimiterPostgres =>
+    new RateLimiterPostgres({
+      storeClient: poolOf(db),
+      storeType: 'pool',
+      tableName: 'rate_limit',
+      tableCreated: true,
+      clearExpiredByTimeout: false,
+      keyPrefix,
+      points,
+      duration: durationS,
+      blockDuration: blockS,
+    });
+  const doors = new Map<Door, RateLimiterPostgres>();
+  /** Counts how often a key had to wait. */
+  const waits = new Map<Door, RateLimiterPostgres>();
+  for (const [door, plan] of Object.entries<DoorPlan>(DOORS) as [Door, DoorPlan][]) {
+    doors.set(door, limiter(door, plan.points * factor, plan.durationS, plan.blockS));
+    if (plan.growsToS) waits.set(door, limiter(`${door}-waits`, Number.MAX_SAFE_INTEGER, ONE_DAY_S, 0));
+  }
+
+  /** Seconds to wait: at the first refusal of a row of tries the wait begins, longer each time. */
+  async function refusedForS(door: Door, key: string, refusal: RateLimiterRes): Promise<number> {
+    const { points, blockS, growsToS }: DoorPlan = DOORS[door];
+    const counter = waits.get(door);
+    if (!counter || !growsToS || refusal.consumedPoints !== points * factor + 1) return refusal.msBeforeNext / 1000;
+    const { consumedPoints: count } = await counter.consume(key);
+    const waitS = Math.min(growsToS, blockS * 2 ** (count - 1));
+    await doors.get(door)?.block(key, waitS);
+    return waitS;
+  }
+
   return {
     async take(door, key) {
+      const hiddenKey = hidden(key);
       try {
-        await limiters[door].consume(key);
+        await doors.get(door)?.consume(hiddenKey);
       } catch (refusal) {
         if (!(refusal instanceof RateLimiterRes)) throw refusal;
-        const retryAfterS = Math.max(1, Math.ceil(refusal.msBeforeNext / 1000));
+        const retryAfterS = Math.max(1, Math.ceil(await refusedForS(door, hiddenKey, refusal)));
         throw new AppError('too-many-tries', `Nothing is lost. Try again in ${retryAfterS} s.`, { retryAfterS });
       }
     },
     async forget(door, key) {
-      await limiters[door].delete(key);
+      const hiddenKey = hidden(key);
+      await doors.get(door)?.delete(hiddenKey);
+      await waits.get(door)?.delete(hiddenKey);
     },
   };
 }

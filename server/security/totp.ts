@@ -22,10 +22,11 @@ export async function totpStepOf(
   epochS: number,
   digits: 6 | 8 = 6,
 ): Promise<number | null> {
-  if (!new RegExp(`^\\d{${digits}}$`).test(code)) return null;
+  const typed = code.replace(/\s/g, '');
+  if (!new RegExp(`^\\d{${digits}}$`).test(typed)) return null;
   const result = await verify({
     secret,
-    token: code,
+    token: typed,
     epoch: epochS,
     epochTolerance: PERIOD_S,
     period: PERIOD_S,

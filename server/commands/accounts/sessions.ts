@@ -1,14 +1,12 @@
+import { promisify } from 'node:util';
 import type { Request } from 'express';
 import type { EntityManager } from 'typeorm';
 
 /** A new session id for the same browser, so that an id known before sign-in is worth nothing after it. */
 const regenerate = (req: Request): Promise<void> =>
-  new Promise((resolve, reject) =>
-    req.session.regenerate((error: unknown) => (error ? reject(error as Error) : resolve())),
-  );
+  promisify((done: (error: unknown) => void) => req.session.regenerate(done))();
 
-const save = (req: Request): Promise<void> =>
-  new Promise((resolve, reject) => req.session.save((error: unknown) => (error ? reject(error as Error) : resolve())));
+const save = (req: Request): Promise<void> => promisify((done: (error: unknown) => void) => req.session.save(done))();
 
 export async function openSession(req: Request, accountId: string, now: Date): Promise<void> {
   await regenerate(req);
@@ -26,9 +24,7 @@ export async function openPendingSession(req: Request, accountId: string, now: D
 }
 
 export const closeSession = (req: Request): Promise<void> =>
-  new Promise((resolve, reject) =>
-    req.session.destroy((error: unknown) => (error ? reject(error as Error) : resolve())),
-  );
+  promisify((done: (error: unknown) => void) => req.session.destroy(done))();
 
 /** Ends an account's sessions on every device, those that still wait for the second factor too. */
 export const endSessionsOf = (manager: EntityManager, accountId: string): Promise<unknown> =>
