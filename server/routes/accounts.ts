@@ -20,12 +20,18 @@ const done =
 export function mountAccounts(api: Api): void {
   api.open(contracts.signIn, signIn);
   api.open(contracts.giveSecondFactor, giveSecondFactor);
-  api.signedIn(contracts.signOut, done((ctx) => closeSession(ctx.req)));
-  api.signedIn(contracts.signOutEverywhere, done(async (ctx) => {
-    await endSessionsOf(ctx.manager, ctx.actor.accountId);
-    await closeSession(ctx.req);
-    ctx.services.endConnections(ctx.actor.accountId);
-  }));
+  api.signedIn(
+    contracts.signOut,
+    done((ctx) => closeSession(ctx.req)),
+  );
+  api.signedIn(
+    contracts.signOutEverywhere,
+    done(async (ctx) => {
+      await endSessionsOf(ctx.manager, ctx.actor.accountId);
+      await closeSession(ctx.req);
+      ctx.services.endConnections(ctx.actor.accountId);
+    }),
+  );
   api.signedIn(contracts.getMe, (ctx) => loadAccountView(ctx.manager, ctx.actor.accountId));
   api.signedIn(contracts.updateMe, async (ctx, input) => {
     await updateMe(ctx, input);

@@ -11,23 +11,40 @@ import { loadMembers, loadShopInvitations } from '../queries/shops/list-members.
 export function mountShops(api: Api): void {
   api.signedIn(contracts.listShops, async (ctx) => {
     if (!ctx.ability.can('administer', 'Installation')) throw new NotPermitted();
-    return (await ctx.manager.find(Shop, { order: { name: 'ASC', id: 'ASC' } })).map((shop) => presentShop(ctx.actor, shop));
+    return (await ctx.manager.find(Shop, { order: { name: 'ASC', id: 'ASC' } })).map((shop) =>
+      presentShop(ctx.actor, shop),
+    );
   });
-  api.signedIn(contracts.createShop, async (ctx, input) => presentShop(ctx.actor, await commands.createShop(ctx, input)));
+  api.signedIn(contracts.createShop, async (ctx, input) =>
+    presentShop(ctx.actor, await commands.createShop(ctx, input)),
+  );
   api.signedIn(contracts.getShop, async (ctx, { params }) => {
     const shop = await ctx.manager.findOneBy(Shop, { id: params.shopId });
     authorize(ctx.ability, 'read', 'Shop', shop);
     return presentShop(ctx.actor, shop);
   });
-  api.signedIn(contracts.updateShop, async (ctx, input) => presentShop(ctx.actor, await commands.updateShop(ctx, input)));
+  api.signedIn(contracts.updateShop, async (ctx, input) =>
+    presentShop(ctx.actor, await commands.updateShop(ctx, input)),
+  );
   api.signedIn(contracts.listShopMembers, async (ctx, { params: { shopId } }) => {
     authorize(ctx.ability, 'read', 'Shop', await ctx.manager.findOneBy(Shop, { id: shopId }));
     const members = await loadMembers(ctx.manager, shopId);
-    return { members, invitations: mayDo(ctx.ability, 'invite', 'Shop', { id: shopId }) ? await loadShopInvitations(ctx.manager, shopId) : [] };
+    return {
+      members,
+      invitations: mayDo(ctx.ability, 'invite', 'Shop', { id: shopId })
+        ? await loadShopInvitations(ctx.manager, shopId)
+        : [],
+    };
   });
   api.signedIn(contracts.inviteShopMember, async (ctx, input) => {
     const row = await commands.inviteShopMember(ctx, input);
-    return { id: row.id, email: row.email, role: input.body.role, invitedAt: row.createdAt.toISOString(), expiresAt: row.expiresAt.toISOString() };
+    return {
+      id: row.id,
+      email: row.email,
+      role: input.body.role,
+      invitedAt: row.createdAt.toISOString(),
+      expiresAt: row.expiresAt.toISOString(),
+    };
   });
   api.signedIn(contracts.withdrawShopInvitation, async (ctx, input) => {
     await commands.withdrawShopInvitation(ctx, input);
@@ -35,7 +52,9 @@ export function mountShops(api: Api): void {
   });
   api.signedIn(contracts.changeShopMember, async (ctx, input) => {
     await commands.changeShopMember(ctx, input);
-    const member = (await loadMembers(ctx.manager, input.params.shopId)).find((one) => one.accountId === input.params.accountId);
+    const member = (await loadMembers(ctx.manager, input.params.shopId)).find(
+      (one) => one.accountId === input.params.accountId,
+    );
     if (!member) throw new NotFound();
     return member;
   });

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { emailAddress, instant, line, uuid } from './common.ts';
+import { country, emailAddress, instant, line, timeZone, uuid } from './common.ts';
 import { defineRoute, nothing } from './route.ts';
 import { LENGTH_UNITS, SHOP_ROLES } from './vocabulary.ts';
 
@@ -11,18 +11,6 @@ export const newPassword = z
   .string()
   .min(15, 'Use at least 15 characters; a few plain words work well')
   .max(200, 'Keep this to 200 characters');
-
-const timeZone = z
-  .string()
-  .max(60)
-  .refine((name) => {
-    try {
-      new Intl.DateTimeFormat('en', { timeZone: name });
-      return true;
-    } catch {
-      return false;
-    }
-  }, 'This is not a time zone name such as Europe/Berlin');
 
 /** Six digits of an authenticator (RFC 6238) or a recovery code. */
 const secondFactorCode = z.string().trim().min(6, 'Give the six digits, or a recovery code').max(24);
@@ -244,7 +232,7 @@ export const acceptInvitation = defineRoute({
     newAccount: z.object({ displayName: line(80), password: newPassword, timeZone: timeZone.optional() }).optional(),
     /** For a shop's part in a commission: one of the person's shops, or a new one. */
     shopId: uuid.optional(),
-    newShop: z.object({ name: line(80), country: z.string().length(2) }).optional(),
+    newShop: z.object({ name: line(80), country }).optional(),
   }),
   response: z.object({ commissionId: uuid.nullable(), shopId: uuid.nullable(), signedIn: z.boolean() }),
   problems: ['link-expired', 'not-permitted', 'already-there', 'not-signed-in', 'too-many-tries', 'busy'],

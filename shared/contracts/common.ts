@@ -35,6 +35,22 @@ export const emailAddress = z
   .max(254, 'Keep this to 254 characters')
   .pipe(z.email({ error: 'Give an e-mail address' }));
 
+/** IANA time zone name. */
+export const timeZone = z
+  .string()
+  .max(60)
+  .refine((name) => {
+    try {
+      new Intl.DateTimeFormat('en', { timeZone: name });
+      return true;
+    } catch {
+      return false;
+    }
+  }, 'This is not a time zone name such as Europe/Berlin');
+
+/** ISO 3166-1 alpha-2. */
+export const country = z.string().regex(/^[A-Z]{2}$/, 'Give the two-letter country code (ISO 3166-1)');
+
 export const inCommission = z.object({ commissionId: uuid });
 
 /** One page of a list; `nextCursor` is opaque and absent on the last page. */

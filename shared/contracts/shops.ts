@@ -1,10 +1,9 @@
 import { z } from 'zod';
-import { emailAddress, instant, line, optionalProse, revision, uuid } from './common.ts';
+import { country, emailAddress, instant, line, optionalProse, revision, timeZone, uuid } from './common.ts';
 import { defineRoute, nothing } from './route.ts';
 import { SHOP_ROLES, SHOP_TINTS } from './vocabulary.ts';
 
 const inShop = z.object({ shopId: uuid });
-const country = z.string().regex(/^[A-Z]{2}$/, 'Give the two-letter country code (ISO 3166-1)');
 
 export const shopView = z.object({
   id: uuid,
@@ -88,7 +87,7 @@ export const updateShop = defineRoute({
     name: line(80).optional(),
     craft: optionalProse(80).optional(),
     country: country.optional(),
-    timeZone: z.string().max(60).optional(),
+    timeZone: timeZone.optional(),
     tint: z.enum(SHOP_TINTS).optional(),
   }),
   response: shopView,

@@ -14,7 +14,8 @@ export const updateMe = (ctx: RequestContext, { body }: ParsedInput<typeof contr
     await uow.manager.update(Account, { id: accountId }, changes);
     if (!changes.displayName) return;
     const asClient = await uow.manager.query<{ commission_id: string }[]>(
-      `SELECT "commission_id" FROM "party" WHERE "account_id" = $1 AND "left_at" IS NULL AND 'client' = ANY("roles")`,
+      `SELECT "commission_id" FROM "party" WHERE "account_id" = $1 AND "left_at" IS NULL AND 'client' = ANY("roles")
+        ORDER BY "commission_id"`,
       [accountId],
     );
     for (const { commission_id: commissionId } of asClient) await refreshCommissionNames(uow.manager, commissionId);

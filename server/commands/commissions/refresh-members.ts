@@ -5,6 +5,9 @@ import type { EntityManager } from 'typeorm';
  * transaction as every change of parties, shop name or client name.
  */
 export async function refreshCommissionNames(manager: EntityManager, commissionId: string): Promise<void> {
+  // A statement of its own: the next one then sees what an earlier holder of the row committed. The lock is the one an
+  // update takes, since a stronger one would block on the keys that new parties hold.
+  await manager.query('SELECT 1 FROM "commission" WHERE "id" = $1 FOR NO KEY UPDATE', [commissionId]);
   await manager.query(
     `UPDATE "commission" SET
        "member_keys" = COALESCE((SELECT array_agg(COALESCE(p."shop_id", p."account_id")) FROM "party" p
@@ -12,7 +15,8 @@ export async function refreshCommissionNames(manager: EntityManager, commissionI
        "lead_name" = COALESCE((SELECT s."name" FROM "party" p JOIN "shop" s ON s."id" = p."shop_id"
           WHERE p."commission_id" = $1 AND p."left_at" IS NULL AND 'lead' = ANY(p."roles")), ''),
        "client_name" = (SELECT a."display_name" FROM "party" p JOIN "account" a ON a."id" = p."account_id"
-          WHERE p."commission_id" = $1 AND p."left_at" IS NULL AND 'client' = ANY(p."roles") LIMIT 1)
+          WHERE p."commission_id" = $1 AND p."left_at" IS NULL AND 'client' = ANY(p."roles")
+          ORDER BY p."joined_at", p."id" LIMIT 1)
      WHERE "id" = $1`,
     [commissionId],
   );

@@ -4,7 +4,12 @@ import { AppError } from '../../errors.ts';
 import { hashToken } from '../../security/tokens.ts';
 
 /** The invitation behind a link, while it can still be taken. @param lock takes the row for the rest of the transaction */
-export async function findInvitation(manager: EntityManager, token: string, now: Date, lock = false): Promise<Invitation> {
+export async function findInvitation(
+  manager: EntityManager,
+  token: string,
+  now: Date,
+  lock = false,
+): Promise<Invitation> {
   const row = await manager.findOne(Invitation, {
     where: { tokenHash: hashToken(token), acceptedAt: IsNull(), withdrawnAt: IsNull(), expiresAt: MoreThan(now) },
     ...(lock ? { lock: { mode: 'pessimistic_write' as const } } : {}),

@@ -7,11 +7,16 @@ import type { OpenContext } from '../../http/context.ts';
 import { loadAccountView } from '../accounts/load-account.ts';
 import { findInvitation, needsShop } from './find-invitation.ts';
 
-export async function previewInvitation(ctx: OpenContext, { body }: ParsedInput<typeof contract>): Promise<RouteOutput<typeof contract>> {
+export async function previewInvitation(
+  ctx: OpenContext,
+  { body }: ParsedInput<typeof contract>,
+): Promise<RouteOutput<typeof contract>> {
   await ctx.services.limits.take('link', ctx.req.ip ?? 'unknown');
   const invitation = await findInvitation(ctx.manager, body.token, ctx.now);
   const inviter = await ctx.manager.findOneByOrFail(Account, { id: invitation.invitedByAccountId });
-  const commission = invitation.commissionId ? await ctx.manager.findOneBy(Commission, { id: invitation.commissionId }) : null;
+  const commission = invitation.commissionId
+    ? await ctx.manager.findOneBy(Commission, { id: invitation.commissionId })
+    : null;
   const shop = invitation.shopId ? await ctx.manager.findOneBy(Shop, { id: invitation.shopId }) : null;
   const me = ctx.sessionAccountId ? await loadAccountView(ctx.manager, ctx.sessionAccountId) : null;
   const forYou = me?.email === invitation.email;
@@ -24,7 +29,10 @@ export async function previewInvitation(ctx: OpenContext, { body }: ParsedInput<
     email: invitation.email,
     expiresAt: invitation.expiresAt.toISOString(),
     forYou,
-    yourShops: forYou && me ? me.shops.filter((one) => one.role !== 'bookkeeper').map(({ shopId, name }) => ({ shopId, name })) : [],
+    yourShops:
+      forYou && me
+        ? me.shops.filter((one) => one.role !== 'bookkeeper').map(({ shopId, name }) => ({ shopId, name }))
+        : [],
     needsShop: needsShop(invitation),
   };
 }

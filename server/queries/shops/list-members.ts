@@ -14,7 +14,11 @@ interface MemberRow {
 }
 
 const presentMember = (row: MemberRow): ShopMemberView => ({
-  accountId: row.account_id, displayName: row.display_name, email: row.email, role: row.role, joinedAt: row.joined_at.toISOString(),
+  accountId: row.account_id,
+  displayName: row.display_name,
+  email: row.email,
+  role: row.role,
+  joinedAt: row.joined_at.toISOString(),
 });
 
 export async function loadMembers(manager: EntityManager, shopId: string): Promise<Members['members']> {
@@ -27,10 +31,18 @@ export async function loadMembers(manager: EntityManager, shopId: string): Promi
 }
 
 export async function loadShopInvitations(manager: EntityManager, shopId: string): Promise<Members['invitations']> {
-  const rows = await manager.query<{ id: string; email: string; shop_role: ShopRole; created_at: Date; expires_at: Date }[]>(
+  const rows = await manager.query<
+    { id: string; email: string; shop_role: ShopRole; created_at: Date; expires_at: Date }[]
+  >(
     `SELECT "id", "email", "shop_role", "created_at", "expires_at" FROM "invitation"
      WHERE "shop_id" = $1 AND "accepted_at" IS NULL AND "withdrawn_at" IS NULL AND "expires_at" > now() ORDER BY "created_at", "id"`,
     [shopId],
   );
-  return rows.map((row) => ({ id: row.id, email: row.email, role: row.shop_role, invitedAt: row.created_at.toISOString(), expiresAt: row.expires_at.toISOString() }));
+  return rows.map((row) => ({
+    id: row.id,
+    email: row.email,
+    role: row.shop_role,
+    invitedAt: row.created_at.toISOString(),
+    expiresAt: row.expires_at.toISOString(),
+  }));
 }
