@@ -104,7 +104,7 @@ function allowMembership(allow: Can, membership: Membership): void {
   }
   if (roles.includes('guest')) return allowGuest(allow, membership);
 
-  allow('read', ['Party', 'Part', 'Standing'] as never, here);
+  allow('read', ['Party', 'Part', 'Standing', 'Pictures'] as never, here);
   allow('picture', 'Commission', { id: commissionId });
   allow(['read', 'post'], 'Thread', { ...here, audience: 'everyone' });
   allow(['read', 'post'], 'Thread', { ...here, partyIds: { $in: [mine] } });
@@ -127,6 +127,7 @@ function allowGuest(allow: Can, { commissionId, guestSees }: Membership): void {
   const here = { commissionId };
   allow('read', 'Standing', here);
   if (guestSees.includes('parts')) allow('read', ['Party', 'Part'] as never, here);
+  if (guestSees.includes('pictures')) allow('read', 'Pictures', here);
   if (guestSees.includes('threads')) allow('read', 'Thread', { ...here, audience: 'everyone' });
 }
 

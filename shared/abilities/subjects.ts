@@ -15,6 +15,8 @@ export interface SubjectFacts {
   Handoff: { commissionId: string; fromPartyId: string; toPartyId: string };
   Thread: { commissionId: string; audience: Audience; partyIds: readonly string[] };
   Standing: { commissionId: string };
+  /** Pictures of the commission itself: cover, brief, condition. */
+  Pictures: { commissionId: string };
 }
 
 export type SubjectName = keyof SubjectFacts;

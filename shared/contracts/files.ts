@@ -39,7 +39,7 @@ export const listFiles = defineRoute({
   query: z.object({ place: z.enum(FILE_PLACES), placeId: uuid }),
   body: nothing,
   response: z.array(storedFileView),
-  problems: ['not-found'],
+  problems: ['not-found', 'not-permitted'],
 });
 
 export const uploadFile = defineRoute({
@@ -73,7 +73,7 @@ export const readFileContent = defineRoute({
   query: z.object({ size: z.enum(IMAGE_SIZES).optional() }),
   body: nothing,
   response: nothing,
-  problems: ['not-found', 'range-not-satisfiable'],
+  problems: ['not-found', 'not-permitted', 'range-not-satisfiable'],
 });
 
 export const removeFile = defineRoute({

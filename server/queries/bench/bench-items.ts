@@ -15,7 +15,7 @@ type Core = Pick<BenchItemView, 'kind' | 'refId' | 'words'> & Partial<BenchItemV
  * Every act that the open commissions wait for, and the party it waits on. The page splits them: mine are what waits on
  * my hands; those of others that concern my parties are what I wait on.
  */
-export function waitsOf(facts: BenchFacts): Wait[] {
+export function waitsOf(facts: BenchFacts, todayIso: string): Wait[] {
   const pieces = new Map(facts.commissions.map((commission) => [commission.id, commission]));
   const names = new Map(facts.parties.map((party) => [party.id, party.name]));
   const legsWaiting = new Map(facts.legs.map((leg) => [leg.id, leg.waiting]));
@@ -90,7 +90,7 @@ export function waitsOf(facts: BenchFacts): Wait[] {
         kind: 'offer-day',
         words: `No day is agreed for ${handoff.partNames} to ${names.get(handoff.toPartyId)}`,
       });
-    } else if (handoff.holderReady) {
+    } else if (handoff.holderReady && handoff.agreedOn <= todayIso) {
       add(handoff.commissionId, handoff.toPartyId, both, {
         ...common,
         kind: 'receive-parts',

@@ -21,7 +21,7 @@ export async function getBench(ctx: RequestContext): Promise<RouteOutput<typeof 
     { bench_seen_at: Date | null }[]
   >('SELECT "bench_seen_at" FROM "account" WHERE "id" = $1', [ctx.actor.accountId]);
   const facts = await loadBenchFacts(ctx.manager, ctx.actor.accountId, commissionIds);
-  const waits = waitsOf(facts);
+  const waits = waitsOf(facts, ctx.todayIso);
   const onMe = waits.filter((wait) => mine.has(wait.partyId)).map((wait) => wait.item);
   const onOthers = waits
     .filter(
