@@ -18,5 +18,8 @@ export const updateMe = (ctx: RequestContext, { body }: ParsedInput<typeof contr
         ORDER BY "commission_id"`,
       [accountId],
     );
-    for (const { commission_id: commissionId } of asClient) await refreshCommissionNames(uow.manager, commissionId);
+    for (const { commission_id: commissionId } of asClient) {
+      await refreshCommissionNames(uow.manager, commissionId);
+      uow.announce('parties.changed', { commissionId }, { to: 'everyone', commissionId });
+    }
   });
