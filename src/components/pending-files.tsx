@@ -17,8 +17,14 @@ export function PendingFiles({ uploads }: { uploads: ReturnType<typeof useUpload
           />
           {file.trouble && <p className="text-note text-oxide">{file.trouble}</p>}
           <div className="flex gap-2">
-            {file.state === 'failed' && <Button variant="outline" onClick={() => uploads.again(file.id)}>Try again</Button>}
-            <Button variant="quiet" onClick={() => uploads.drop(file.id)}>{file.state === 'sending' ? 'Cancel' : 'Leave it out'}</Button>
+            {file.state === 'failed' && (
+              <Button variant="outline" onClick={() => uploads.again(file.id)}>
+                Try again
+              </Button>
+            )}
+            <Button variant="quiet" onClick={() => uploads.drop(file.id)}>
+              {file.state === 'sending' ? 'Cancel' : 'Leave it out'}
+            </Button>
           </div>
         </li>
       ))}

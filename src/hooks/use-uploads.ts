@@ -14,7 +14,8 @@ export function useUploads(target: UploadTarget) {
   const [files, setFiles] = useState<PendingFile[]>([]);
   const running = useRef(new Map<string, { file: File; upload: RunningUpload }>());
 
-  const patch = (id: string, change: Partial<PendingFile>): void => setFiles((all) => all.map((one) => (one.id === id ? { ...one, ...change } : one)));
+  const patch = (id: string, change: Partial<PendingFile>): void =>
+    setFiles((all) => all.map((one) => (one.id === id ? { ...one, ...change } : one)));
   const send = (id: string, file: File): void => {
     const upload = startUpload(target, id, file, (share) => patch(id, { share }));
     running.current.set(id, { file, upload });

@@ -38,6 +38,7 @@ export const keys = {
       [...commission(commissionId), 'threads', 'messages', threadId] as const,
   },
   files: {
+    all: (commissionId: string) => [...commission(commissionId), 'files'] as const,
     list: (commissionId: string, place: FilePlace, placeId: string) =>
       [...commission(commissionId), 'files', place, placeId] as const,
   },

@@ -1,5 +1,14 @@
 import type { Socket } from 'socket.io-client';
-import { PRESENCE_EVENT, REALTIME_EVENTS, type Acknowledgement, type ClientEventName, type ClientEvents, type RealtimeEvents, type RealtimeName, type ThreadPresence } from '../../shared/realtime/events.ts';
+import {
+  PRESENCE_EVENT,
+  REALTIME_EVENTS,
+  type Acknowledgement,
+  type ClientEventName,
+  type ClientEvents,
+  type RealtimeEvents,
+  type RealtimeName,
+  type ThreadPresence,
+} from '../../shared/realtime/events.ts';
 
 type Listener<T> = (value: T) => void;
 
@@ -21,7 +30,12 @@ export async function openRealtime(): Promise<void> {
   const { io } = await import('socket.io-client');
   if (socket) return;
   // The server's own jitter: a restart must not bring every browser back in the same instant.
-  const made = io({ transports: ['websocket'], reconnectionDelay: 500, reconnectionDelayMax: 8000, randomizationFactor: 0.6 });
+  const made = io({
+    transports: ['websocket'],
+    reconnectionDelay: 500,
+    reconnectionDelayMax: 8000,
+    randomizationFactor: 0.6,
+  });
   socket = made;
   made.on('connect', () => {
     setUp(true);
@@ -31,7 +45,8 @@ export async function openRealtime(): Promise<void> {
   made.on('connect_error', () => setUp(false));
   made.onAny((name: string, payload: unknown) => {
     if (name === PRESENCE_EVENT) for (const listener of presence) listener(payload as ThreadPresence);
-    else if (name in REALTIME_EVENTS) for (const listener of events.get(name as RealtimeName) ?? []) (listener as Listener<unknown>)(payload);
+    else if (name in REALTIME_EVENTS)
+      for (const listener of events.get(name as RealtimeName) ?? []) (listener as Listener<unknown>)(payload);
   });
 }
 
@@ -67,5 +82,8 @@ export const connectionState = {
 /** Tells the server something that lives only as long as the connection does; without one it is dropped. */
 export async function tell<N extends ClientEventName>(name: N, event: ClientEvents[N]): Promise<Acknowledgement> {
   if (!socket?.connected) return { ok: false, code: 'not-connected' };
-  return (await socket.timeout(5000).emitWithAck(name, event).catch(() => ({ ok: false, code: 'not-answered' }))) as Acknowledgement;
+  return (await socket
+    .timeout(5000)
+    .emitWithAck(name, event)
+    .catch(() => ({ ok: false, code: 'not-answered' }))) as Acknowledgement;
 }

@@ -1,6 +1,11 @@
 /** The calendar day (ISO 8601) in a time zone at an instant; by default the device's. */
 export const todayIn = (timeZone?: string, instant = new Date()): string =>
-  new Intl.DateTimeFormat('en-CA', { year: 'numeric', month: '2-digit', day: '2-digit', ...(timeZone ? { timeZone } : {}) }).format(instant);
+  new Intl.DateTimeFormat('en-CA', {
+    year: 'numeric',
+    month: '2-digit',
+    day: '2-digit',
+    ...(timeZone ? { timeZone } : {}),
+  }).format(instant);
 
 /** "Mon 9 Mar, 16:20" on the device's clock. */
 export const shortInstant = (iso: string): string => {

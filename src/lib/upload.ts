@@ -20,7 +20,12 @@ export class UploadCancelled extends Error {}
  * Sends one file with progress. The id is the sender's: sending again after a lost answer stores nothing twice.
  * @param onProgress share sent, 0 to 1
  */
-export function startUpload(target: UploadTarget, id: string, file: File, onProgress: (share: number) => void): RunningUpload {
+export function startUpload(
+  target: UploadTarget,
+  id: string,
+  file: File,
+  onProgress: (share: number) => void,
+): RunningUpload {
   const { commissionId, place, placeId, purpose } = target;
   const request = new XMLHttpRequest();
   const form = new FormData();
@@ -32,7 +37,9 @@ export function startUpload(target: UploadTarget, id: string, file: File, onProg
     request.onload = () => {
       const json = (): Promise<unknown> => Promise.resolve().then(() => JSON.parse(request.responseText) as unknown);
       if (request.status >= 200 && request.status < 300)
-        json().then((body) => uploadFile.response.parse(body)).then(resolve, reject);
+        json()
+          .then((body) => uploadFile.response.parse(body))
+          .then(resolve, reject);
       else problemOf({ json }).then(reject, reject);
     };
     request.onerror = () => problemOf({ json: () => Promise.resolve(null) }).then(reject, reject);
@@ -44,4 +51,5 @@ export function startUpload(target: UploadTarget, id: string, file: File, onProg
   return { done, cancel: () => request.abort() };
 }
 
-export const uploadTrouble = (error: unknown): string => (error instanceof ApiProblem ? error.message : 'The file did not arrive. It is still here; try again.');
+export const uploadTrouble = (error: unknown): string =>
+  error instanceof ApiProblem ? error.message : 'The file did not arrive. It is still here; try again.';

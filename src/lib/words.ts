@@ -1,26 +1,58 @@
-import type { CommissionState, JointKind, LegKind, PartKind, PartyRole, ReportState } from '../../shared/contracts/vocabulary.ts';
+import type {
+  CommissionState,
+  JointKind,
+  LegKind,
+  PartKind,
+  PartyRole,
+  ReportState,
+} from '../../shared/contracts/vocabulary.ts';
 import type { Tone } from '../components/ui/tone.ts';
 
 /** How the closed word lists read on the page. */
 export const ROLE_WORDS: Readonly<Record<PartyRole, string>> = {
-  lead: 'Lead', maker: 'Maker', finisher: 'Finisher', installer: 'Installer', client: 'Client', guest: 'Guest',
+  lead: 'Lead',
+  maker: 'Maker',
+  finisher: 'Finisher',
+  installer: 'Installer',
+  client: 'Client',
+  guest: 'Guest',
 };
 
 export const COMMISSION_STATE_WORDS: Readonly<Record<CommissionState, string>> = {
-  'in-brief': 'In brief', 'at-work': 'At work', delivered: 'Delivered', ended: 'Ended',
+  'in-brief': 'In brief',
+  'at-work': 'At work',
+  delivered: 'Delivered',
+  ended: 'Ended',
 };
 
 export const LEG_KIND_WORDS: Readonly<Record<LegKind, string>> = {
-  machining: 'Machining', finishing: 'Finishing', chassis: 'Chassis', wiring: 'Wiring', blade: 'Blade', 'bench-test': 'Bench test', other: 'Other work',
+  machining: 'Machining',
+  finishing: 'Finishing',
+  chassis: 'Chassis',
+  wiring: 'Wiring',
+  blade: 'Blade',
+  'bench-test': 'Bench test',
+  other: 'Other work',
 };
 
 export const PART_KIND_WORDS: Readonly<Record<PartKind, string>> = {
-  hilt: 'Hilt', pommel: 'Pommel', emitter: 'Emitter', chassis: 'Chassis', blade: 'Blade', switch: 'Switch', grip: 'Grip', other: 'Other part',
+  hilt: 'Hilt',
+  pommel: 'Pommel',
+  emitter: 'Emitter',
+  chassis: 'Chassis',
+  blade: 'Blade',
+  switch: 'Switch',
+  grip: 'Grip',
+  other: 'Other part',
 };
 
 export const JOINT_KIND_WORDS: Readonly<Record<JointKind, string>> = {
-  'spigot-in-bore': 'Spigot in bore', 'chassis-in-cavity': 'Chassis in cavity', 'blade-in-holder': 'Blade in holder',
-  'plunger-in-hole': 'Plunger in its hole', 'screw-in-thread': 'Screw in its thread', other: 'Other joint',
+  'spigot-in-bore': 'Spigot in bore',
+  'chassis-in-cavity': 'Chassis in cavity',
+  'blade-in-holder': 'Blade in holder',
+  'plunger-in-hole': 'Plunger in its hole',
+  'screw-in-thread': 'Screw in its thread',
+  other: 'Other joint',
 };
 
 /** What each side of a joint is called at the bench. */

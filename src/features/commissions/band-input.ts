@@ -12,10 +12,14 @@ interface Sources {
   handoffs?: readonly HandoffView[];
 }
 
-function ringOf(fact: ClientFacts['handoffs'][number], handoff: HandoffView | undefined): { state: RingState; day: string | null } {
+function ringOf(
+  fact: ClientFacts['handoffs'][number],
+  handoff: HandoffView | undefined,
+): { state: RingState; day: string | null } {
   if (fact.doneOn) return { state: 'done', day: fact.doneOn };
   const standing = handoff?.offers?.find((offer) => offer.state === 'standing');
-  if (standing && !fact.agreedOn) return { state: standing.byPartyId === handoff?.fromPartyId ? 'from-agrees' : 'to-agrees', day: standing.onDay };
+  if (standing && !fact.agreedOn)
+    return { state: standing.byPartyId === handoff?.fromPartyId ? 'from-agrees' : 'to-agrees', day: standing.onDay };
   return fact.agreedOn ? { state: 'agreed', day: fact.agreedOn } : { state: 'open', day: null };
 }
 
@@ -47,8 +51,13 @@ export function bandInputFrom({ facts, todayIso, legs = [], handoffs = [] }: Sou
     handoffs: facts.handoffs.map((fact): BandHandoff => {
       const handoff = seenHandoffs.get(fact.id);
       return {
-        id: fact.id, partIds: fact.partIds, fromName: fact.fromName, toName: fact.toName,
-        fromLegId: handoff?.fromLegId ?? null, toLegId: handoff?.toLegId ?? null, ...ringOf(fact, handoff),
+        id: fact.id,
+        partIds: fact.partIds,
+        fromName: fact.fromName,
+        toName: fact.toName,
+        fromLegId: handoff?.fromLegId ?? null,
+        toLegId: handoff?.toLegId ?? null,
+        ...ringOf(fact, handoff),
       };
     }),
     expected: facts.expected,

@@ -38,11 +38,18 @@ function agreedOf(toleranceClass: string | null, nominalMm: number): SideOfJoint
 export function fitOfJoint(joint: JointView, readings: readonly ReadingView[]): FitOfJoint {
   const sideOf = (side: ReadingView['side'], toleranceClass: string | null): SideOfJoint => {
     const newest = newestSet(readings, side);
-    return { readings: newest, readingsUm: newest.map((reading) => (reading.valueMm - joint.nominalMm) * 1000), agreed: agreedOf(toleranceClass, joint.nominalMm) };
+    return {
+      readings: newest,
+      readingsUm: newest.map((reading) => (reading.valueMm - joint.nominalMm) * 1000),
+      agreed: agreedOf(toleranceClass, joint.nominalMm),
+    };
   };
   const hole = sideOf('hole', joint.holeClass);
   const shaft = sideOf('shaft', joint.shaftClass);
   const range = { clearanceMinUm: joint.clearanceMinUm, clearanceMaxUm: joint.clearanceMaxUm };
-  const result = hole.readings.length > 0 && shaft.readings.length > 0 ? assessClearance({ hole: hole.readings, shaft: shaft.readings, ...range }) : null;
+  const result =
+    hole.readings.length > 0 && shaft.readings.length > 0
+      ? assessClearance({ hole: hole.readings, shaft: shaft.readings, ...range })
+      : null;
   return { hole, shaft, result, removal: result && removalFor(result, range) };
 }

@@ -2,7 +2,10 @@ import type { PartyView } from '../../../shared/contracts/commissions.ts';
 import type { Audience } from '../../../shared/contracts/vocabulary.ts';
 
 /** Who reads a thread, in words; it is on screen all the time while someone writes. The lead reads named threads too. */
-export function audienceWords(thread: { audience: Audience; partyIds: readonly string[] }, parties: readonly PartyView[]): string {
+export function audienceWords(
+  thread: { audience: Audience; partyIds: readonly string[] },
+  parties: readonly PartyView[],
+): string {
   const names = (list: readonly PartyView[]): string => list.map((party) => party.displayName).join(' + ');
   switch (thread.audience) {
     case 'everyone':
@@ -20,7 +23,10 @@ export function audienceWords(thread: { audience: Audience; partyIds: readonly s
 }
 
 /** Parties whose people may be named in a thread. */
-export function readersOf(thread: { audience: Audience; partyIds: readonly string[] }, parties: readonly PartyView[]): PartyView[] {
+export function readersOf(
+  thread: { audience: Audience; partyIds: readonly string[] },
+  parties: readonly PartyView[],
+): PartyView[] {
   return parties.filter((party) => {
     if (party.roles.includes('guest')) return false;
     if (thread.audience === 'everyone') return true;

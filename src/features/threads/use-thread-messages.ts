@@ -22,7 +22,11 @@ export function useThreadMessages(commissionId: string, threadId: string) {
   const query = useInfiniteQuery({
     queryKey,
     queryFn: ({ signal, pageParam }) =>
-      api(listMessages, { params: { commissionId, threadId }, query: { limit: PAGE, ...(pageParam ? { before: pageParam } : {}) } }, { signal }),
+      api(
+        listMessages,
+        { params: { commissionId, threadId }, query: { limit: PAGE, ...(pageParam ? { before: pageParam } : {}) } },
+        { signal },
+      ),
     initialPageParam: null as number | null,
     // Pages go back in time: the first page holds the newest messages.
     getNextPageParam: (oldest) => {
@@ -39,7 +43,8 @@ export function useThreadMessages(commissionId: string, threadId: string) {
     const newest = queryClient.getQueryData<Pages>(queryKey)?.pages[0];
     const follower = createThreadFollower<MessageView>({
       lastSequence: newest?.lastSequence ?? 0,
-      fetchAfter: async (after) => (await api(listMessages, { params: { commissionId, threadId }, query: { after, limit: 200 } })).messages,
+      fetchAfter: async (after) =>
+        (await api(listMessages, { params: { commissionId, threadId }, query: { after, limit: 200 } })).messages,
       onMessages: (messages) =>
         queryClient.setQueryData<Pages>(queryKey, (data) => {
           const [first, ...older] = data?.pages ?? [];
@@ -60,7 +65,10 @@ export function useThreadMessages(commissionId: string, threadId: string) {
     };
   }, [ready, queryClient, queryKey, commissionId, threadId]);
 
-  const messages = useMemo(() => [...(query.data?.pages ?? [])].reverse().flatMap((page) => page.messages), [query.data]);
+  const messages = useMemo(
+    () => [...(query.data?.pages ?? [])].reverse().flatMap((page) => page.messages),
+    [query.data],
+  );
   return {
     messages,
     lastSequence: query.data?.pages[0]?.lastSequence ?? 0,

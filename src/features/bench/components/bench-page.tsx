@@ -15,7 +15,10 @@ import { BenchRow } from './bench-row.tsx';
 function Moved({ line }: { line: MovedView }) {
   return (
     <li className="border-b border-hairline py-3 last:border-b-0">
-      <Link to={addressOfSubject(line.commissionId, line.subject, line.subjectId)} className="underline decoration-hairline underline-offset-4">
+      <Link
+        to={addressOfSubject(line.commissionId, line.subject, line.subjectId)}
+        className="underline decoration-hairline underline-offset-4"
+      >
         {line.words}
       </Link>
       <p className="text-note text-lead-grey">
@@ -42,7 +45,9 @@ export function BenchPage({ today }: { today: string }) {
         headline={
           data.waitsOnYou.length === 0
             ? 'Nothing waits on your hands.'
-            : data.waitsOnYou.length === 1 ? 'One thing waits on your hands.' : `${data.waitsOnYou.length} things wait on your hands.`
+            : data.waitsOnYou.length === 1
+              ? 'One thing waits on your hands.'
+              : `${data.waitsOnYou.length} things wait on your hands.`
         }
       />
       <TwoColumns
@@ -50,16 +55,28 @@ export function BenchPage({ today }: { today: string }) {
           <div className="grid gap-5">
             <Sheet title="Waits on you" note="What holds up most comes first">
               {data.waitsOnYou.length === 0 ? (
-                <EmptyState title="Your hands are free">Reports to answer, days to agree and legs to start will stand here.</EmptyState>
+                <EmptyState title="Your hands are free">
+                  Reports to answer, days to agree and legs to start will stand here.
+                </EmptyState>
               ) : (
-                <ul aria-label="Waits on you">{data.waitsOnYou.map((item) => <BenchRow key={item.kind + item.refId} item={item} today={today} mine />)}</ul>
+                <ul aria-label="Waits on you">
+                  {data.waitsOnYou.map((item) => (
+                    <BenchRow key={item.kind + item.refId} item={item} today={today} mine />
+                  ))}
+                </ul>
               )}
             </Sheet>
             <Sheet title="You wait on">
               {data.youWaitOn.length === 0 ? (
-                <EmptyState title="You wait on nobody">What others owe the pieces you work on will stand here.</EmptyState>
+                <EmptyState title="You wait on nobody">
+                  What others owe the pieces you work on will stand here.
+                </EmptyState>
               ) : (
-                <ul aria-label="You wait on">{data.youWaitOn.map((item) => <BenchRow key={item.kind + item.refId} item={item} today={today} mine={false} />)}</ul>
+                <ul aria-label="You wait on">
+                  {data.youWaitOn.map((item) => (
+                    <BenchRow key={item.kind + item.refId} item={item} today={today} mine={false} />
+                  ))}
+                </ul>
               )}
             </Sheet>
           </div>
@@ -73,9 +90,15 @@ export function BenchPage({ today }: { today: string }) {
               <EmptyState title="Nothing moved">What others do on your pieces will be listed here.</EmptyState>
             ) : (
               <>
-                <ul>{data.moved.map((line) => <Moved key={line.id} line={line} />)}</ul>
+                <ul>
+                  {data.moved.map((line) => (
+                    <Moved key={line.id} line={line} />
+                  ))}
+                </ul>
                 <div className="mt-4">
-                  <Button variant="outline" busy={seen.isPending} onClick={() => seen.mutate()}>I have seen these</Button>
+                  <Button variant="outline" busy={seen.isPending} onClick={() => seen.mutate()}>
+                    I have seen these
+                  </Button>
                 </div>
               </>
             )}

@@ -12,14 +12,33 @@ import { useAct } from '../../../hooks/use-act.ts';
 import { keys } from '../../../lib/query-keys.ts';
 
 const LEAD_IN: Readonly<Record<BenchItemView['kind'], string>> = {
-  'answer-report': '', 'agree-rework': '', 'start-rework': '', 'finish-rework': '', 'verify-rework': '', consent: '',
-  'answer-offer': '', 'offer-day': '', 'receive-parts': 'Receive ', 'start-leg': 'Start: ', 'finish-leg': 'Finish: ', 'read-mention': '',
+  'answer-report': '',
+  'agree-rework': '',
+  'start-rework': '',
+  'finish-rework': '',
+  'verify-rework': '',
+  consent: '',
+  'answer-offer': '',
+  'offer-day': '',
+  'receive-parts': 'Receive ',
+  'start-leg': 'Start: ',
+  'finish-leg': 'Finish: ',
+  'read-mention': '',
 };
 
 const ACT_WORDS: Readonly<Record<BenchItemView['kind'], string>> = {
-  'answer-report': 'Answer', 'agree-rework': 'Read the answer', 'start-rework': 'Open the report', 'finish-rework': 'Open the report',
-  'verify-rework': 'Enter readings', consent: 'Look and decide', 'answer-offer': 'Other day', 'offer-day': 'Offer a day',
-  'receive-parts': 'Receive', 'start-leg': 'Open the plan', 'finish-leg': 'Open the plan', 'read-mention': 'Read',
+  'answer-report': 'Answer',
+  'agree-rework': 'Read the answer',
+  'start-rework': 'Open the report',
+  'finish-rework': 'Open the report',
+  'verify-rework': 'Enter readings',
+  consent: 'Look and decide',
+  'answer-offer': 'Other day',
+  'offer-day': 'Offer a day',
+  'receive-parts': 'Receive',
+  'start-leg': 'Open the plan',
+  'finish-leg': 'Open the plan',
+  'read-mention': 'Read',
 };
 
 function addressOf(item: BenchItemView): string {
@@ -48,7 +67,15 @@ function AcceptDay({ item }: { item: BenchItemView }) {
   const { offerId, refRevision: revision, day } = item;
   return (
     <>
-      <Button busy={accept.pending} onClick={() => accept.run({ params: { commissionId: item.commissionId, handoffId: item.refId, offerId }, body: { revision } })}>
+      <Button
+        busy={accept.pending}
+        onClick={() =>
+          accept.run({
+            params: { commissionId: item.commissionId, handoffId: item.refId, offerId },
+            body: { revision },
+          })
+        }
+      >
         Accept {shortDay(day)}
       </Button>
       <ProblemNotice problem={accept.problem} />
@@ -67,7 +94,12 @@ function MoveLeg({ item, today }: { item: BenchItemView; today: string }) {
       <Button
         variant="outline"
         busy={move.pending}
-        onClick={() => move.run({ params: { commissionId: item.commissionId, legId: item.refId }, body: { revision, state, onDay: today } })}
+        onClick={() =>
+          move.run({
+            params: { commissionId: item.commissionId, legId: item.refId },
+            body: { revision, state, onDay: today },
+          })
+        }
       >
         {state === 'under-way' ? 'Start today' : 'Finished today'}
       </Button>
@@ -91,13 +123,17 @@ export function BenchRow({ item, today, mine }: { item: BenchItemView; today: st
         <p className="flex flex-wrap items-center gap-2 text-note text-lead-grey">
           {!mine && item.whoName && <span>{item.whoName}</span>}
           {item.day && <RelativeDay day={item.day} today={today} form="short" />}
-          {item.holdsUp > 0 && <Stamp tone="oxide">{item.holdsUp === 1 ? 'Holds up one leg' : `Holds up ${item.holdsUp} legs`}</Stamp>}
+          {item.holdsUp > 0 && (
+            <Stamp tone="oxide">{item.holdsUp === 1 ? 'Holds up one leg' : `Holds up ${item.holdsUp} legs`}</Stamp>
+          )}
         </p>
       </div>
       <div className="flex flex-wrap gap-2">
         {mine && item.kind === 'answer-offer' && <AcceptDay item={item} />}
         {mine && (item.kind === 'start-leg' || item.kind === 'finish-leg') && <MoveLeg item={item} today={today} />}
-        <Link to={addressOf(item)} className={buttonClass('outline')}>{mine ? ACT_WORDS[item.kind] : 'Open'}</Link>
+        <Link to={addressOf(item)} className={buttonClass('outline')}>
+          {mine ? ACT_WORDS[item.kind] : 'Open'}
+        </Link>
       </div>
     </li>
   );

@@ -27,23 +27,41 @@ export function ClientWindow({ commissionId, band, thread, pictures }: ClientWin
   return (
     <div className="mx-auto grid w-full max-w-words gap-5">
       <Sheet title="Waiting on you">
-        {asked.length === 0 && days.length === 0 && <p className="text-lead-grey">Nothing. You will hear from us when something does.</p>}
-        {asked.map((consent) => <ConsentCard key={consent.noteId} commissionId={commissionId} consent={consent} />)}
+        {asked.length === 0 && days.length === 0 && (
+          <p className="text-lead-grey">Nothing. You will hear from us when something does.</p>
+        )}
+        {asked.map((consent) => (
+          <ConsentCard key={consent.noteId} commissionId={commissionId} consent={consent} />
+        ))}
         {days.map((wait) => (
-          <p key={wait.refId} className="py-3"><Link className="underline" to={`/commissions/${commissionId}/handoffs/${wait.refId}`}>{wait.words}</Link></p>
+          <p key={wait.refId} className="py-3">
+            <Link className="underline" to={`/commissions/${commissionId}/handoffs/${wait.refId}`}>
+              {wait.words}
+            </Link>
+          </p>
         ))}
       </Sheet>
       <Sheet title="The way so far">{band}</Sheet>
       <Sheet title="Where it is">
-        <ul className="grid gap-1">{standing.whereEachPartIs.map((part) => <li key={part.partId}>{part.words}</li>)}</ul>
+        <ul className="grid gap-1">
+          {standing.whereEachPartIs.map((part) => (
+            <li key={part.partId}>{part.words}</li>
+          ))}
+        </ul>
         {standing.nextAgreedDate && <p className="pt-3">Next agreed day: {standing.nextAgreedDate.words}.</p>}
       </Sheet>
       {pictures}
       {thread}
       <Sheet title="Papers">
         {commission.brief && <p className="max-w-words whitespace-pre-line">{commission.brief}</p>}
-        <p className="pt-3 text-note text-lead-grey">The brief, as agreed. Last changed {shortInstant(commission.updatedAt)}.</p>
-        {consents.filter((consent) => consent.state !== 'asked').map((consent) => <ConsentCard key={consent.noteId} commissionId={commissionId} consent={consent} />)}
+        <p className="pt-3 text-note text-lead-grey">
+          The brief, as agreed. Last changed {shortInstant(commission.updatedAt)}.
+        </p>
+        {consents
+          .filter((consent) => consent.state !== 'asked')
+          .map((consent) => (
+            <ConsentCard key={consent.noteId} commissionId={commissionId} consent={consent} />
+          ))}
       </Sheet>
     </div>
   );

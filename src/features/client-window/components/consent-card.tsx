@@ -28,29 +28,51 @@ export function ConsentCard({ commissionId, consent }: { commissionId: string; c
           {consent.beforeFileIds.map((fileId) => (
             <li key={fileId}>
               <a href={fileAddress(commissionId, fileId, 'full')} target="_blank" rel="noreferrer">
-                <img src={fileAddress(commissionId, fileId, 'thumb')} alt="How it is before the correction" loading="lazy" className="h-32 w-auto rounded border border-hairline" />
+                <img
+                  src={fileAddress(commissionId, fileId, 'thumb')}
+                  alt="How it is before the correction"
+                  loading="lazy"
+                  className="h-32 w-auto rounded border border-hairline"
+                />
               </a>
             </li>
           ))}
         </ul>
       )}
       {consent.state !== 'asked' ? (
-        <p className="text-note text-lead-grey">You {consent.state === 'given' ? 'consented' : 'refused'}{consent.words && `: “${consent.words}”`}.</p>
+        <p className="text-note text-lead-grey">
+          You {consent.state === 'given' ? 'consented' : 'refused'}
+          {consent.words && `: “${consent.words}”`}.
+        </p>
       ) : (
         <>
           {refusing && (
-            <Field label="What you would rather have" optional><TextArea value={words} maxLength={2000} onChange={(event) => setWords(event.target.value)} /></Field>
+            <Field label="What you would rather have" optional>
+              <TextArea value={words} maxLength={2000} onChange={(event) => setWords(event.target.value)} />
+            </Field>
           )}
           <div className="flex flex-wrap gap-2">
             {refusing ? (
               <>
-                <Button variant="danger" busy={answer.pending} onClick={() => answer.run({ params, body: { given: false, words } })}>Refuse this</Button>
-                <Button variant="quiet" onClick={() => setRefusing(false)}>Back</Button>
+                <Button
+                  variant="danger"
+                  busy={answer.pending}
+                  onClick={() => answer.run({ params, body: { given: false, words } })}
+                >
+                  Refuse this
+                </Button>
+                <Button variant="quiet" onClick={() => setRefusing(false)}>
+                  Back
+                </Button>
               </>
             ) : (
               <>
-                <Button busy={answer.pending} onClick={() => answer.run({ params, body: { given: true, words: '' } })}>I consent</Button>
-                <Button variant="outline" onClick={() => setRefusing(true)}>I would rather not</Button>
+                <Button busy={answer.pending} onClick={() => answer.run({ params, body: { given: true, words: '' } })}>
+                  I consent
+                </Button>
+                <Button variant="outline" onClick={() => setRefusing(true)}>
+                  I would rather not
+                </Button>
               </>
             )}
           </div>

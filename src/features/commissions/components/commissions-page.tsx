@@ -17,7 +17,9 @@ import { COMMISSION_STATE_WORDS, ROLE_WORDS } from '../../../lib/words.ts';
 
 const columnsFor = (today: string): Column<CommissionRow>[] => [
   {
-    key: 'title', header: 'Piece', namesRow: true,
+    key: 'title',
+    header: 'Piece',
+    namesRow: true,
     cell: (row) => (
       <Link to={`/commissions/${row.id}`} className="font-semibold underline decoration-hairline underline-offset-4">
         {row.title}
@@ -26,22 +28,30 @@ const columnsFor = (today: string): Column<CommissionRow>[] => [
   },
   { key: 'code', header: 'Code', cell: (row) => <span className="figures whitespace-nowrap">{row.code}</span> },
   {
-    key: 'state', header: 'Where it stands',
+    key: 'state',
+    header: 'Where it stands',
     cell: (row) => (
       <span className="inline-flex flex-wrap gap-2">
         <Stamp tone={row.state === 'delivered' ? 'verdigris' : 'neutral'}>{COMMISSION_STATE_WORDS[row.state]}</Stamp>
-        {row.heldLegs > 0 && <Stamp tone="oxide">{row.heldLegs === 1 ? 'One leg held' : `${row.heldLegs} legs held`}</Stamp>}
+        {row.heldLegs > 0 && (
+          <Stamp tone="oxide">{row.heldLegs === 1 ? 'One leg held' : `${row.heldLegs} legs held`}</Stamp>
+        )}
       </span>
     ),
   },
   { key: 'client', header: 'For', cell: (row) => row.clientName ?? 'no client yet' },
   { key: 'lead', header: 'Lead', cell: (row) => row.leadName },
   { key: 'you', header: 'You are', cell: (row) => row.yourRoles.map((role) => ROLE_WORDS[role]).join(', ') || 'Guest' },
-  { key: 'wanted', header: 'Wanted', cell: (row) => (row.dateWanted ? <RelativeDay day={row.dateWanted} today={today} form="short" /> : 'no date') },
+  {
+    key: 'wanted',
+    header: 'Wanted',
+    cell: (row) => (row.dateWanted ? <RelativeDay day={row.dateWanted} today={today} form="short" /> : 'no date'),
+  },
   { key: 'moved', header: 'Last change', cell: (row) => shortInstant(row.updatedAt) },
 ];
 
-const isState = (text: string | null): text is CommissionState => (COMMISSION_STATES as readonly string[]).includes(text ?? '');
+const isState = (text: string | null): text is CommissionState =>
+  (COMMISSION_STATES as readonly string[]).includes(text ?? '');
 
 /** Every commission the reader has a part in; search and state live in the address. */
 export function CommissionsPage({ mayOpen }: { mayOpen: boolean }) {
@@ -49,7 +59,9 @@ export function CommissionsPage({ mayOpen }: { mayOpen: boolean }) {
   const search = params.get('search') ?? '';
   const stateText = params.get('state');
   const filter = { ...(search ? { search } : {}), ...(isState(stateText) ? { state: stateText } : {}) };
-  const { data, hasNextPage, fetchNextPage, isFetchingNextPage } = useSuspenseInfiniteQuery(commissionQueries.list(filter));
+  const { data, hasNextPage, fetchNextPage, isFetchingNextPage } = useSuspenseInfiniteQuery(
+    commissionQueries.list(filter),
+  );
   const rows = data.pages.flatMap((page) => page.items);
   const setState = (state: string): void =>
     setParams((before) => {
@@ -63,14 +75,22 @@ export function CommissionsPage({ mayOpen }: { mayOpen: boolean }) {
       <PageHeading
         title="Commissions"
         headline={search ? `Found for “${search}”` : undefined}
-        actions={mayOpen ? <Link to="/commissions/new" className={buttonClass('primary')}>Open a commission</Link> : undefined}
+        actions={
+          mayOpen ? (
+            <Link to="/commissions/new" className={buttonClass('primary')}>
+              Open a commission
+            </Link>
+          ) : undefined
+        }
       />
       <div className="mb-4 max-w-60">
         <Field label="Where it stands">
           <Select value={stateText ?? ''} onChange={(event) => setState(event.target.value)}>
             <option value="">All</option>
             {COMMISSION_STATES.map((state) => (
-              <option key={state} value={state}>{COMMISSION_STATE_WORDS[state]}</option>
+              <option key={state} value={state}>
+                {COMMISSION_STATE_WORDS[state]}
+              </option>
             ))}
           </Select>
         </Field>
@@ -90,7 +110,9 @@ export function CommissionsPage({ mayOpen }: { mayOpen: boolean }) {
       />
       {hasNextPage && (
         <div className="mt-4">
-          <Button variant="outline" busy={isFetchingNextPage} onClick={() => void fetchNextPage()}>Show more</Button>
+          <Button variant="outline" busy={isFetchingNextPage} onClick={() => void fetchNextPage()}>
+            Show more
+          </Button>
         </div>
       )}
     </Page>

@@ -19,7 +19,12 @@ import { handoffQueries } from '../../../lib/queries/handoffs.ts';
 import { jointQueries, reportQueries } from '../../../lib/queries/joints.ts';
 import { LEG_KIND_WORDS, REPORT_STATE_STAMPS } from '../../../lib/words.ts';
 
-const LEG_STATE_WORDS: Readonly<Record<LegView['state'], string>> = { planned: 'Planned', 'under-way': 'Under way', finished: 'Finished', dropped: 'Dropped' };
+const LEG_STATE_WORDS: Readonly<Record<LegView['state'], string>> = {
+  planned: 'Planned',
+  'under-way': 'Under way',
+  finished: 'Finished',
+  dropped: 'Dropped',
+};
 
 /** Parts and who holds each. */
 export function WhoHasWhat({ commissionId }: { commissionId: string }) {
@@ -27,12 +32,19 @@ export function WhoHasWhat({ commissionId }: { commissionId: string }) {
   const { nameOf } = usePartyBook(commissionId);
   return (
     <Sheet title="Who has what">
-      {parts.length === 0 ? <EmptyState title="No parts yet">Hilt, pommel, chassis and blade will be listed with who holds them.</EmptyState> : (
+      {parts.length === 0 ? (
+        <EmptyState title="No parts yet">
+          Hilt, pommel, chassis and blade will be listed with who holds them.
+        </EmptyState>
+      ) : (
         <dl className="grid grid-cols-[auto_1fr] gap-x-6">
           {parts.map((part) => (
             <div key={part.id} className="contents">
               <dt className="border-b border-hairline py-2">{part.name}</dt>
-              <dd className="border-b border-hairline py-2">{nameOf(part.holderPartyId)} <span className="text-note text-lead-grey">since {shortDay(part.holderSince)}</span></dd>
+              <dd className="border-b border-hairline py-2">
+                {nameOf(part.holderPartyId)}{' '}
+                <span className="text-note text-lead-grey">since {shortDay(part.holderSince)}</span>
+              </dd>
             </div>
           ))}
         </dl>
@@ -44,16 +56,33 @@ export function WhoHasWhat({ commissionId }: { commissionId: string }) {
 /** Starts or finishes one of the reader's own legs as of today. */
 export function LegActs({ commissionId, leg, today }: { commissionId: string; leg: LegView; today: string }) {
   const { ability } = useSight(commissionId);
-  const move = useAct(moveLeg, { stale: () => [keys.legs.list(commissionId), keys.standing.detail(commissionId), keys.bench()] });
+  const move = useAct(moveLeg, {
+    stale: () => [keys.legs.list(commissionId), keys.standing.detail(commissionId), keys.bench()],
+  });
   if (!mayDo(ability, 'move', 'Leg', { commissionId, partyId: leg.partyId })) return null;
   const next = leg.state === 'planned' ? 'under-way' : leg.state === 'under-way' ? 'finished' : null;
   if (!next) return null;
-  const run = (early: boolean): void => move.run({ params: { commissionId, legId: leg.id }, body: { revision: leg.revision, state: next, onDay: today, early } });
+  const run = (early: boolean): void =>
+    move.run({
+      params: { commissionId, legId: leg.id },
+      body: { revision: leg.revision, state: next, onDay: today, early },
+    });
   return (
     <div className="grid gap-2">
       <div className="flex flex-wrap gap-2">
-        <Button variant="outline" busy={move.pending} disabled={leg.held !== null && next === 'finished'} onClick={() => run(false)}>{next === 'under-way' ? 'Start today' : 'Finished today'}</Button>
-        {move.problem?.code === 'not-in-this-state' && next === 'under-way' && <Button variant="quiet" onClick={() => run(true)}>Start early all the same</Button>}
+        <Button
+          variant="outline"
+          busy={move.pending}
+          disabled={leg.held !== null && next === 'finished'}
+          onClick={() => run(false)}
+        >
+          {next === 'under-way' ? 'Start today' : 'Finished today'}
+        </Button>
+        {move.problem?.code === 'not-in-this-state' && next === 'under-way' && (
+          <Button variant="quiet" onClick={() => run(true)}>
+            Start early all the same
+          </Button>
+        )}
       </div>
       <ProblemNotice problem={move.problem} />
     </div>
@@ -74,7 +103,9 @@ export function OwnLegs({ commissionId, today }: { commissionId: string; today: 
             <p className="flex flex-wrap items-center gap-2">
               <span className="font-semibold">{leg.title}</span>
               <span className="text-note text-lead-grey">{LEG_KIND_WORDS[leg.kind]}</span>
-              <Stamp tone={leg.state === 'finished' ? 'verdigris' : leg.state === 'under-way' ? 'brass' : 'neutral'}>{LEG_STATE_WORDS[leg.state]}</Stamp>
+              <Stamp tone={leg.state === 'finished' ? 'verdigris' : leg.state === 'under-way' ? 'brass' : 'neutral'}>
+                {LEG_STATE_WORDS[leg.state]}
+              </Stamp>
               {leg.held && <Stamp tone="oxide">Held since {shortDay(leg.held.sinceDay)}</Stamp>}
             </p>
             {leg.privateNote && <p className="text-note text-lead-grey">Own note: {leg.privateNote}</p>}
@@ -93,21 +124,38 @@ export function JointsAndReports({ commissionId }: { commissionId: string }) {
   const { nameOf } = usePartyBook(commissionId);
   return (
     <Sheet title="Joints">
-      {joints.length === 0 ? <EmptyState title="No joints yet">Where two parts meet, and who answers for each side, will stand here.</EmptyState> : (
+      {joints.length === 0 ? (
+        <EmptyState title="No joints yet">
+          Where two parts meet, and who answers for each side, will stand here.
+        </EmptyState>
+      ) : (
         <ul>
           {joints.map((joint) => {
             const open = reports.find((report) => report.id === joint.openReportId);
             return (
               <li key={joint.id} className="border-b border-hairline py-3 last:border-b-0">
                 <p className="flex flex-wrap items-center gap-2">
-                  <Link className="font-semibold underline decoration-hairline underline-offset-4" to={`/commissions/${commissionId}/joints/${joint.id}`}>{joint.name}</Link>
-                  {joint.holeClass && joint.shaftClass && <span className="figures text-note">{joint.holeClass}/{joint.shaftClass}</span>}
+                  <Link
+                    className="font-semibold underline decoration-hairline underline-offset-4"
+                    to={`/commissions/${commissionId}/joints/${joint.id}`}
+                  >
+                    {joint.name}
+                  </Link>
+                  {joint.holeClass && joint.shaftClass && (
+                    <span className="figures text-note">
+                      {joint.holeClass}/{joint.shaftClass}
+                    </span>
+                  )}
                   {joint.handFit && <span className="text-note text-lead-grey">{joint.handFit}</span>}
                 </p>
-                <p className="text-note text-lead-grey">{nameOf(joint.holePartyId)} and {nameOf(joint.shaftPartyId)}</p>
+                <p className="text-note text-lead-grey">
+                  {nameOf(joint.holePartyId)} and {nameOf(joint.shaftPartyId)}
+                </p>
                 {open && (
                   <p className="flex flex-wrap items-center gap-2 pt-1">
-                    <Link className="underline" to={`/commissions/${commissionId}/reports/${open.id}`}>{open.title}</Link>
+                    <Link className="underline" to={`/commissions/${commissionId}/reports/${open.id}`}>
+                      {open.title}
+                    </Link>
                     <Stamp tone={REPORT_STATE_STAMPS[open.state].tone}>{REPORT_STATE_STAMPS[open.state].words}</Stamp>
                   </p>
                 )}
@@ -129,14 +177,23 @@ export function OpenHandoffs({ commissionId }: { commissionId: string }) {
   const open = handoffs.filter((handoff) => !handoff.doneOn);
   return (
     <Sheet title="Handoffs to come">
-      {open.length === 0 ? <EmptyState title="None planned">Parts that change hands will be listed with their days.</EmptyState> : (
+      {open.length === 0 ? (
+        <EmptyState title="None planned">Parts that change hands will be listed with their days.</EmptyState>
+      ) : (
         <ul>
           {open.map((handoff) => {
             const offered = handoff.offers?.find((offer) => offer.state === 'standing');
             return (
               <li key={handoff.id} className="border-b border-hairline py-3 last:border-b-0">
-                <Link className="underline decoration-hairline underline-offset-4" to={`/commissions/${commissionId}/handoffs/${handoff.id}`}>
-                  {handoff.partIds.map((id) => partName.get(id)).filter(Boolean).join(', ')}: {nameOf(handoff.fromPartyId)} to {nameOf(handoff.toPartyId)}
+                <Link
+                  className="underline decoration-hairline underline-offset-4"
+                  to={`/commissions/${commissionId}/handoffs/${handoff.id}`}
+                >
+                  {handoff.partIds
+                    .map((id) => partName.get(id))
+                    .filter(Boolean)
+                    .join(', ')}
+                  : {nameOf(handoff.fromPartyId)} to {nameOf(handoff.toPartyId)}
                 </Link>
                 <p className="text-note text-lead-grey">
                   {handoff.agreedOn ? `agreed ${shortDay(handoff.agreedOn)}` : 'no day agreed'}
@@ -155,10 +212,23 @@ export function OpenHandoffs({ commissionId }: { commissionId: string }) {
 export function ToldToClient({ commissionId }: { commissionId: string }) {
   const { data } = useSuspenseQuery(commissionQueries.standing(commissionId));
   const standing = standingFor(data.facts, data.todayIso);
-  const lines = [...standing.waitsOnYou.map((wait) => `Waits on the client: ${wait.words}`), ...standing.waitsOnOthers.map((words) => `Waits on ${words}`), ...standing.now.map((now) => now.words), ...(standing.nextAgreedDate ? [`Next agreed day: ${standing.nextAgreedDate.words}`] : [])];
+  const lines = [
+    ...standing.waitsOnYou.map((wait) => `Waits on the client: ${wait.words}`),
+    ...standing.waitsOnOthers.map((words) => `Waits on ${words}`),
+    ...standing.now.map((now) => now.words),
+    ...(standing.nextAgreedDate ? [`Next agreed day: ${standing.nextAgreedDate.words}`] : []),
+  ];
   return (
     <Sheet title="What the client sees" note="The headline above, and this">
-      {lines.length === 0 ? <p className="text-lead-grey">Nothing beyond the headline.</p> : <ul className="grid gap-1">{lines.map((line) => <li key={line}>{line}</li>)}</ul>}
+      {lines.length === 0 ? (
+        <p className="text-lead-grey">Nothing beyond the headline.</p>
+      ) : (
+        <ul className="grid gap-1">
+          {lines.map((line) => (
+            <li key={line}>{line}</li>
+          ))}
+        </ul>
+      )}
     </Sheet>
   );
 }

@@ -21,7 +21,15 @@ const CONSENT: Readonly<Record<'asked' | 'given' | 'refused', { words: string; t
 };
 
 /** One rework note as its readers see it. */
-export function NoteSheet({ note, nameOf, sideNames }: { note: ReworkNoteView; nameOf: (partyId: string) => string; sideNames: { hole: string; shaft: string } }) {
+export function NoteSheet({
+  note,
+  nameOf,
+  sideNames,
+}: {
+  note: ReworkNoteView;
+  nameOf: (partyId: string) => string;
+  sideNames: { hole: string; shaft: string };
+}) {
   return (
     <Sheet
       title="Rework note"
@@ -35,12 +43,19 @@ export function NoteSheet({ note, nameOf, sideNames }: { note: ReworkNoteView; n
     >
       <p className="max-w-words pb-3 whitespace-pre-line">{note.method}</p>
       <MeasureTable caption="What comes off">
-        <MeasureRow emphasised label={`Off the ${sideNames[note.cutSide]}, on diameter`} value={formatMm(note.removeOnDiameterUm / 1000)} />
+        <MeasureRow
+          emphasised
+          label={`Off the ${sideNames[note.cutSide]}, on diameter`}
+          value={formatMm(note.removeOnDiameterUm / 1000)}
+        />
         <MeasureRow label="per side" value={formatMm(note.removeOnDiameterUm / 2000)} />
         {note.overLengthMm !== null && <MeasureRow label="over" value={formatMm(note.overLengthMm, 1)} />}
         <MeasureRow label="Shows when closed" value={note.shows ? note.whereItShows : 'no'} />
         {note.risk && <MeasureRow label="Risk" value={note.risk} />}
-        <MeasureRow label="Cost" value={`${formatMinor(note.costMinor, note.currency)}${note.costBorneByPartyId ? `, borne by ${nameOf(note.costBorneByPartyId)}` : ''}`} />
+        <MeasureRow
+          label="Cost"
+          value={`${formatMinor(note.costMinor, note.currency)}${note.costBorneByPartyId ? `, borne by ${nameOf(note.costBorneByPartyId)}` : ''}`}
+        />
         <MeasureRow label="Takes" value={note.effectDays === 1 ? '1 working day' : `${note.effectDays} working days`} />
       </MeasureTable>
       {note.consent?.words && <p className="pt-3 text-note">The client: “{note.consent.words}”</p>}

@@ -28,7 +28,14 @@ export function RaiseForm({ commissionId, jointId, legs, onRaised }: RaiseFormPr
   const open = legs.filter((leg) => leg.state === 'under-way' || leg.state === 'planned');
   const [heldLegId, setHeldLegId] = useState(open.find((leg) => leg.state === 'under-way')?.id ?? open[0]?.id ?? '');
   const raise = useAct(raiseFitReport, {
-    stale: () => [keys.fitReports.lists(commissionId), keys.joints.lists(commissionId), keys.joints.detail(commissionId, jointId), keys.legs.list(commissionId), keys.standing.detail(commissionId), keys.bench()],
+    stale: () => [
+      keys.fitReports.lists(commissionId),
+      keys.joints.lists(commissionId),
+      keys.joints.detail(commissionId, jointId),
+      keys.legs.list(commissionId),
+      keys.standing.detail(commissionId),
+      keys.bench(),
+    ],
     onDone: (detail) => {
       forgetTitle();
       forgetWords();
@@ -41,21 +48,40 @@ export function RaiseForm({ commissionId, jointId, legs, onRaised }: RaiseFormPr
       className="grid gap-4"
       onSubmit={(event) => {
         event.preventDefault();
-        raise.run({ params: { commissionId }, body: { jointId, title, plainWords: words, blocking: holds, heldLegId: holds ? heldLegId : null } });
+        raise.run({
+          params: { commissionId },
+          body: { jointId, title, plainWords: words, blocking: holds, heldLegId: holds ? heldLegId : null },
+        });
       }}
     >
-      <Field label="What is wrong, in a few words" hint="For instance: pommel will not draw"><TextInput value={title} required maxLength={120} onChange={(event) => setTitle(event.target.value)} /></Field>
-      <Field label="What you saw" optional><TextArea value={words} maxLength={4000} onChange={(event) => setWords(event.target.value)} /></Field>
-      {open.length > 0 && <Checkbox label="Work can not go on until this is settled" checked={blocking} onChange={(event) => setBlocking(event.target.checked)} />}
+      <Field label="What is wrong, in a few words" hint="For instance: pommel will not draw">
+        <TextInput value={title} required maxLength={120} onChange={(event) => setTitle(event.target.value)} />
+      </Field>
+      <Field label="What you saw" optional>
+        <TextArea value={words} maxLength={4000} onChange={(event) => setWords(event.target.value)} />
+      </Field>
+      {open.length > 0 && (
+        <Checkbox
+          label="Work can not go on until this is settled"
+          checked={blocking}
+          onChange={(event) => setBlocking(event.target.checked)}
+        />
+      )}
       {holds && (
         <Field label="Which leg it holds">
           <Select value={heldLegId} onChange={(event) => setHeldLegId(event.target.value)}>
-            {open.map((leg) => <option key={leg.id} value={leg.id}>{leg.title}</option>)}
+            {open.map((leg) => (
+              <option key={leg.id} value={leg.id}>
+                {leg.title}
+              </option>
+            ))}
           </Select>
         </Field>
       )}
       <div className="flex flex-wrap items-center gap-3">
-        <Button type="submit" busy={raise.pending}>Raise the report</Button>
+        <Button type="submit" busy={raise.pending}>
+          Raise the report
+        </Button>
         {(title !== '' || words !== '') && <span className="text-note text-lead-grey">draft kept</span>}
       </div>
       <ProblemNotice problem={raise.problem} />

@@ -26,7 +26,21 @@ interface ActsProps {
 }
 
 /** An act that needs words: the words are kept as a draft until it is done. */
-function WordedAct({ name, label, button, required, onSend, pending }: { name: string; label: string; button: string; required: boolean; onSend: (words: string, forget: () => void) => void; pending: boolean }) {
+function WordedAct({
+  name,
+  label,
+  button,
+  required,
+  onSend,
+  pending,
+}: {
+  name: string;
+  label: string;
+  button: string;
+  required: boolean;
+  onSend: (words: string, forget: () => void) => void;
+  pending: boolean;
+}) {
   const [words, setWords, forget] = useDraft(name, '');
   return (
     <form
@@ -37,9 +51,18 @@ function WordedAct({ name, label, button, required, onSend, pending }: { name: s
       }}
     >
       <Field label={label} optional={!required}>
-        <TextArea value={words} required={required} maxLength={2000} onChange={(event) => setWords(event.target.value)} />
+        <TextArea
+          value={words}
+          required={required}
+          maxLength={2000}
+          onChange={(event) => setWords(event.target.value)}
+        />
       </Field>
-      <div><Button type="submit" variant="outline" busy={pending}>{button}</Button></div>
+      <div>
+        <Button type="submit" variant="outline" busy={pending}>
+          {button}
+        </Button>
+      </div>
     </form>
   );
 }
@@ -60,7 +83,9 @@ export function ReportActs({ commissionId, detail }: ActsProps) {
   const latest = notes.at(-1);
   const note = latest && latest.state !== 'other-limits-asked' ? latest : null;
   const facts = { commissionId, raisedByPartyId: report.raisedByPartyId, answerPartyId: report.answerPartyId };
-  const open = new Set(openReportActs({ state: report.state, shows: note?.shows ?? false, consent: note?.consent?.state ?? null }));
+  const open = new Set(
+    openReportActs({ state: report.state, shows: note?.shows ?? false, consent: note?.consent?.state ?? null }),
+  );
   const may = (action: 'agree' | 'rework' | 'verify' | 'withdraw') => mayDo(ability, action, 'FitReport', facts);
   const { revision } = report;
   const problem = [agree, ask, start, finish, verify, withdraw].map((act) => act.problem).find(Boolean) ?? null;
@@ -70,36 +95,86 @@ export function ReportActs({ commissionId, detail }: ActsProps) {
     <div className="grid gap-4">
       {open.has('agree') && may('agree') && note && (
         <div className="flex flex-wrap gap-2">
-          <Button busy={agree.pending} onClick={() => agree.run({ params, body: { revision, noteId: note.id } })}>Agree to this rework</Button>
-          <Button variant="outline" aria-expanded={asking} onClick={() => setAsking(!asking)}>Ask for other limits</Button>
+          <Button busy={agree.pending} onClick={() => agree.run({ params, body: { revision, noteId: note.id } })}>
+            Agree to this rework
+          </Button>
+          <Button variant="outline" aria-expanded={asking} onClick={() => setAsking(!asking)}>
+            Ask for other limits
+          </Button>
         </div>
       )}
       {asking && note && (
-        <WordedAct name={`other-limits-${report.id}`} label="What should be different" button="Ask for another answer" required pending={ask.pending}
-          onSend={(words, forget) => { ask.run({ params, body: { revision, noteId: note.id, words } }); forget(); }} />
+        <WordedAct
+          name={`other-limits-${report.id}`}
+          label="What should be different"
+          button="Ask for another answer"
+          required
+          pending={ask.pending}
+          onSend={(words, forget) => {
+            ask.run({ params, body: { revision, noteId: note.id, words } });
+            forget();
+          }}
+        />
       )}
-      {waitsForClient && <p className="text-note">This rework shows, so work waits for the client's consent. The client has been asked.</p>}
+      {waitsForClient && (
+        <p className="text-note">
+          This rework shows, so work waits for the client's consent. The client has been asked.
+        </p>
+      )}
       {open.has('start-rework') && may('rework') && (
-        <div><Button busy={start.pending} onClick={() => start.run({ params, body: { revision } })}>Begin the rework</Button></div>
+        <div>
+          <Button busy={start.pending} onClick={() => start.run({ params, body: { revision } })}>
+            Begin the rework
+          </Button>
+        </div>
       )}
       {open.has('finish-rework') && may('rework') && (
-        <WordedAct name={`finish-${report.id}`} label="What was done" button="The rework is done" required={false} pending={finish.pending}
-          onSend={(words, forget) => { finish.run({ params, body: { revision, words } }); forget(); }} />
+        <WordedAct
+          name={`finish-${report.id}`}
+          label="What was done"
+          button="The rework is done"
+          required={false}
+          pending={finish.pending}
+          onSend={(words, forget) => {
+            finish.run({ params, body: { revision, words } });
+            forget();
+          }}
+        />
       )}
       {open.has('verify-pass') && may('verify') && (
         <div className="grid gap-3">
           <p className="text-note">Measure the parts afresh below, then say whether they go together as agreed.</p>
           <div className="flex flex-wrap gap-2">
-            <Button busy={verify.pending} onClick={() => verify.run({ params, body: { revision, passed: true, words: '' } })}>It goes together: close the report</Button>
-            <Button variant="outline" busy={verify.pending} onClick={() => verify.run({ params, body: { revision, passed: false, words: '' } })}>It does not: open it again</Button>
+            <Button
+              busy={verify.pending}
+              onClick={() => verify.run({ params, body: { revision, passed: true, words: '' } })}
+            >
+              It goes together: close the report
+            </Button>
+            <Button
+              variant="outline"
+              busy={verify.pending}
+              onClick={() => verify.run({ params, body: { revision, passed: false, words: '' } })}
+            >
+              It does not: open it again
+            </Button>
           </div>
         </div>
       )}
       {open.has('withdraw') && may('withdraw') && (
         <details>
           <summary className="min-h-thumb cursor-pointer py-2 text-note">Take this report back</summary>
-          <WordedAct name={`withdraw-${report.id}`} label="Why it is taken back" button="Take the report back" required pending={withdraw.pending}
-            onSend={(words, forget) => { withdraw.run({ params, body: { revision, words } }); forget(); }} />
+          <WordedAct
+            name={`withdraw-${report.id}`}
+            label="Why it is taken back"
+            button="Take the report back"
+            required
+            pending={withdraw.pending}
+            onSend={(words, forget) => {
+              withdraw.run({ params, body: { revision, words } });
+              forget();
+            }}
+          />
         </details>
       )}
       <ProblemNotice problem={problem} />

@@ -13,29 +13,59 @@ import { REPORT_STATE_STAMPS } from '../../../lib/words.ts';
 import { staleAfterReport } from './report-acts.tsx';
 
 const ACT_WORDS: Readonly<Record<string, string>> = {
-  raise: 'raised it', answer: 'answered with a rework note', agree: 'agreed to the rework', 'ask-other-limits': 'asked for another answer',
-  'start-rework': 'began the rework', 'finish-rework': 'finished the rework', 'verify-pass': 'verified and closed it', 'verify-fail': 'verified: it does not go together, open again',
-  withdraw: 'took it back', 'consent-given': 'consented as client', 'consent-refused': 'refused as client',
+  raise: 'raised it',
+  answer: 'answered with a rework note',
+  agree: 'agreed to the rework',
+  'ask-other-limits': 'asked for another answer',
+  'start-rework': 'began the rework',
+  'finish-rework': 'finished the rework',
+  'verify-pass': 'verified and closed it',
+  'verify-fail': 'verified: it does not go together, open again',
+  withdraw: 'took it back',
+  'consent-given': 'consented as client',
+  'consent-refused': 'refused as client',
 };
 
 /** What was found, and everything that happened to the report since. */
-export function ReportHead({ detail, nameOf, legTitle }: { detail: FitReportDetail; nameOf: (partyId: string) => string; legTitle: string | null }) {
+export function ReportHead({
+  detail,
+  nameOf,
+  legTitle,
+}: {
+  detail: FitReportDetail;
+  nameOf: (partyId: string) => string;
+  legTitle: string | null;
+}) {
   const { report, events } = detail;
   const stamp = REPORT_STATE_STAMPS[report.state];
   return (
     <Sheet
       title={`Fit report: ${report.title}`}
       note={`raised by ${report.raisedByName} of ${nameOf(report.raisedByPartyId)}, ${shortInstant(report.raisedAt)}; ${nameOf(report.answerPartyId)} answers`}
-      stamp={<span className="flex flex-wrap gap-2">{report.blocking && legTitle && report.state !== 'closed' && report.state !== 'withdrawn' && <Stamp tone="oxide">Holds {legTitle}</Stamp>}<Stamp tone={stamp.tone}>{stamp.words}</Stamp></span>}
+      stamp={
+        <span className="flex flex-wrap gap-2">
+          {report.blocking && legTitle && report.state !== 'closed' && report.state !== 'withdrawn' && (
+            <Stamp tone="oxide">Holds {legTitle}</Stamp>
+          )}
+          <Stamp tone={stamp.tone}>{stamp.words}</Stamp>
+        </span>
+      }
     >
       {report.plainWords && <p className="max-w-words whitespace-pre-line">{report.plainWords}</p>}
-      {report.reopenedCount > 0 && <p className="pt-2 text-note text-oxide">Opened again {report.reopenedCount === 1 ? 'once' : `${report.reopenedCount} times`} after a verification that failed.</p>}
+      {report.reopenedCount > 0 && (
+        <p className="pt-2 text-note text-oxide">
+          Opened again {report.reopenedCount === 1 ? 'once' : `${report.reopenedCount} times`} after a verification that
+          failed.
+        </p>
+      )}
       <details className="pt-3">
         <summary className="min-h-thumb cursor-pointer py-2 text-note">What happened so far</summary>
         <ol className="grid gap-1 text-note">
           {events.map((event) => (
             <li key={event.id}>
-              <span className="text-lead-grey">{shortInstant(event.at)}</span> {event.by} {ACT_WORDS[event.act] ?? event.act}{event.words && `: “${event.words}”`}
+              <span className="text-lead-grey">{shortInstant(event.at)}</span> {event.by}{' '}
+              {ACT_WORDS[event.act] ?? event.act}
+              {event.words && `: “${event.words}”`}
             </li>
           ))}
         </ol>
@@ -50,16 +80,28 @@ export function ClientWords({ commissionId, detail }: { commissionId: string; de
   const [words, setWords, forget] = useDraft(`client-words-${report.id}`, report.clientWords);
   const write = useAct(writeClientWords, { stale: () => staleAfterReport(commissionId, report.id), onDone: forget });
   return (
-    <Sheet title="What the client reads of this" note="Until you write something, they read that a part does not yet go together as agreed">
+    <Sheet
+      title="What the client reads of this"
+      note="Until you write something, they read that a part does not yet go together as agreed"
+    >
       <form
         className="grid gap-3"
         onSubmit={(event) => {
           event.preventDefault();
-          write.run({ params: { commissionId, reportId: report.id }, body: { revision: report.revision, clientWords: words } });
+          write.run({
+            params: { commissionId, reportId: report.id },
+            body: { revision: report.revision, clientWords: words },
+          });
         }}
       >
-        <Field label="In the client's words" hint="For instance: the end cap was too tight"><TextInput value={words} required maxLength={200} onChange={(event) => setWords(event.target.value)} /></Field>
-        <div><Button type="submit" variant="outline" busy={write.pending}>Release these words</Button></div>
+        <Field label="In the client's words" hint="For instance: the end cap was too tight">
+          <TextInput value={words} required maxLength={200} onChange={(event) => setWords(event.target.value)} />
+        </Field>
+        <div>
+          <Button type="submit" variant="outline" busy={write.pending}>
+            Release these words
+          </Button>
+        </div>
         <ProblemNotice problem={write.problem} />
       </form>
     </Sheet>

@@ -31,8 +31,15 @@ const standingOf = (handoff: HandoffView) => handoff.offers?.find((offer) => off
 
 /** What a day does to the client's date, said before anyone agrees to it. */
 function DayEffect({ commissionId, handoffId, onDay }: { commissionId: string; handoffId: string; onDay: string }) {
-  const { data } = useQuery({ ...handoffQueries.effect(commissionId, handoffId, onDay), enabled: /^\d{4}-\d{2}-\d{2}$/.test(onDay) });
-  return <p className="min-h-6 text-note text-lead-grey" aria-live="polite">{data?.words ?? ''}</p>;
+  const { data } = useQuery({
+    ...handoffQueries.effect(commissionId, handoffId, onDay),
+    enabled: /^\d{4}-\d{2}-\d{2}$/.test(onDay),
+  });
+  return (
+    <p className="min-h-6 text-note text-lead-grey" aria-live="polite">
+      {data?.words ?? ''}
+    </p>
+  );
 }
 
 /** Offers a day, or counters the one that stands. What is typed is kept until it is offered. */
@@ -51,7 +58,10 @@ function OfferDay({ commissionId, handoff, today, countering }: HandoffProps & {
       className="grid gap-3"
       onSubmit={(event) => {
         event.preventDefault();
-        offer.run({ params: { commissionId, handoffId: handoff.id }, body: { revision: handoff.revision, onDay, words } });
+        offer.run({
+          params: { commissionId, handoffId: handoff.id },
+          body: { revision: handoff.revision, onDay, words },
+        });
       }}
     >
       <Field label={countering ? 'Another day' : 'Day'}>
@@ -62,7 +72,9 @@ function OfferDay({ commissionId, handoff, today, countering }: HandoffProps & {
       </Field>
       <DayEffect commissionId={commissionId} handoffId={handoff.id} onDay={onDay} />
       <div>
-        <Button type="submit" variant={countering ? 'outline' : 'primary'} busy={offer.pending}>{countering ? 'Offer this day instead' : 'Offer this day'}</Button>
+        <Button type="submit" variant={countering ? 'outline' : 'primary'} busy={offer.pending}>
+          {countering ? 'Offer this day instead' : 'Offer this day'}
+        </Button>
       </div>
       <ProblemNotice problem={offer.problem} />
     </form>
@@ -72,7 +84,12 @@ function OfferDay({ commissionId, handoff, today, countering }: HandoffProps & {
 function AnswerOffer({ commissionId, handoff, today }: HandoffProps) {
   const [declining, setDeclining] = useState(false);
   const [reason, setReason, forgetReason] = useDraft(`handoff-reason-${handoff.id}`, '');
-  const stale = () => [keys.handoffs.lists(commissionId), keys.handoffs.detail(commissionId, handoff.id), keys.standing.detail(commissionId), keys.bench()];
+  const stale = () => [
+    keys.handoffs.lists(commissionId),
+    keys.handoffs.detail(commissionId, handoff.id),
+    keys.standing.detail(commissionId),
+    keys.bench(),
+  ];
   const accept = useAct(contracts.acceptHandoffDay, { stale });
   const decline = useAct(contracts.declineHandoffDay, {
     stale,
@@ -88,8 +105,12 @@ function AnswerOffer({ commissionId, handoff, today }: HandoffProps) {
     <div className="grid gap-4">
       <DayEffect commissionId={commissionId} handoffId={handoff.id} onDay={standing.onDay} />
       <div className="flex flex-wrap gap-2">
-        <Button busy={accept.pending} onClick={() => accept.run({ params, body: { revision: handoff.revision } })}>Accept {shortDay(standing.onDay)}</Button>
-        <Button variant="quiet" onClick={() => setDeclining(!declining)} aria-expanded={declining}>Decline with a reason</Button>
+        <Button busy={accept.pending} onClick={() => accept.run({ params, body: { revision: handoff.revision } })}>
+          Accept {shortDay(standing.onDay)}
+        </Button>
+        <Button variant="quiet" onClick={() => setDeclining(!declining)} aria-expanded={declining}>
+          Decline with a reason
+        </Button>
       </div>
       <ProblemNotice problem={accept.problem ?? decline.problem} />
       {declining && (
@@ -103,7 +124,11 @@ function AnswerOffer({ commissionId, handoff, today }: HandoffProps) {
           <Field label="Why this day does not work" required>
             <TextInput value={reason} required maxLength={1000} onChange={(event) => setReason(event.target.value)} />
           </Field>
-          <div><Button type="submit" variant="outline" busy={decline.pending}>Decline {shortDay(standing.onDay)}</Button></div>
+          <div>
+            <Button type="submit" variant="outline" busy={decline.pending}>
+              Decline {shortDay(standing.onDay)}
+            </Button>
+          </div>
         </form>
       )}
       <details>
@@ -127,14 +152,21 @@ function OwnOffer({ commissionId, handoff, today }: HandoffProps) {
         <Button
           variant="quiet"
           busy={withdraw.pending}
-          onClick={() => withdraw.run({ params: { commissionId, handoffId: handoff.id, offerId: standing.id }, body: { revision: handoff.revision } })}
+          onClick={() =>
+            withdraw.run({
+              params: { commissionId, handoffId: handoff.id, offerId: standing.id },
+              body: { revision: handoff.revision },
+            })
+          }
         >
           Take the offer back
         </Button>
       </div>
       <ProblemNotice problem={withdraw.problem} />
       <details>
-        <summary className="min-h-thumb cursor-pointer py-2 font-semibold text-brass">Offer another day instead</summary>
+        <summary className="min-h-thumb cursor-pointer py-2 font-semibold text-brass">
+          Offer another day instead
+        </summary>
         <OfferDay commissionId={commissionId} handoff={handoff} today={today} countering={false} />
       </details>
     </div>
@@ -149,37 +181,61 @@ function Receive({ commissionId, handoff, today }: HandoffProps) {
       className="grid gap-3 border-t border-hairline pt-4"
       onSubmit={(event) => {
         event.preventDefault();
-        receive.run({ params: { commissionId, handoffId: handoff.id }, body: { revision: handoff.revision, onDay, words: '' } });
+        receive.run({
+          params: { commissionId, handoffId: handoff.id },
+          body: { revision: handoff.revision, onDay, words: '' },
+        });
       }}
     >
       <Field label="Arrived on">
         <DateInput value={onDay} max={today} required onChange={(event) => setOnDay(event.target.value)} />
       </Field>
-      <div><Button type="submit" variant="outline" busy={receive.pending}>The parts are here</Button></div>
+      <div>
+        <Button type="submit" variant="outline" busy={receive.pending}>
+          The parts are here
+        </Button>
+      </div>
       <ProblemNotice problem={receive.problem} />
     </form>
   );
 }
 
 /** One handoff: what each side offers, live, and the acts that are open to this reader. */
-export function HandoffSheet({ commissionId, handoffId, today }: { commissionId: string; handoffId: string; today: string }) {
+export function HandoffSheet({
+  commissionId,
+  handoffId,
+  today,
+}: {
+  commissionId: string;
+  handoffId: string;
+  today: string;
+}) {
   const { data: handoff } = useSuspenseQuery(handoffQueries.detail(commissionId, handoffId));
   const { data: standingData } = useSuspenseQuery(commissionQueries.standing(commissionId));
   const { ability, mine } = useSight(commissionId);
   const { nameOf } = usePartyBook(commissionId);
-  const partNames = standingData.facts.parts.filter((part) => handoff.partIds.includes(part.id)).map((part) => part.name);
+  const partNames = standingData.facts.parts
+    .filter((part) => handoff.partIds.includes(part.id))
+    .map((part) => part.name);
   const facts = { commissionId, fromPartyId: handoff.fromPartyId, toPartyId: handoff.toPartyId };
   const mayOffer = mayDo(ability, 'offer', 'Handoff', facts) && !handoff.doneOn;
   const standing = standingOf(handoff);
-  const ownOffer = standing !== null && mine.has(standing.byPartyId) && !(mine.has(handoff.fromPartyId) && mine.has(handoff.toPartyId));
+  const ownOffer =
+    standing !== null &&
+    mine.has(standing.byPartyId) &&
+    !(mine.has(handoff.fromPartyId) && mine.has(handoff.toPartyId));
   const shared = { commissionId, handoff, today };
   return (
     <Sheet
       title={`Handoff: ${partNames.join(', ')} to ${nameOf(handoff.toPartyId)}`}
       stamp={
-        handoff.doneOn ? <Stamp tone="verdigris">Handed over {shortDay(handoff.doneOn)}</Stamp>
-        : handoff.agreedOn ? <Stamp tone="verdigris">Agreed {shortDay(handoff.agreedOn)}</Stamp>
-        : <Stamp tone="brass">No day agreed</Stamp>
+        handoff.doneOn ? (
+          <Stamp tone="verdigris">Handed over {shortDay(handoff.doneOn)}</Stamp>
+        ) : handoff.agreedOn ? (
+          <Stamp tone="verdigris">Agreed {shortDay(handoff.agreedOn)}</Stamp>
+        ) : (
+          <Stamp tone="brass">No day agreed</Stamp>
+        )
       }
     >
       <dl className="grid gap-x-6 border-b border-hairline sm:grid-cols-[auto_1fr]" data-testid="handoff-sides">
@@ -190,11 +246,22 @@ export function HandoffSheet({ commissionId, handoffId, today }: { commissionId:
             <div key={partyId} className="contents">
               <dt className="pt-2 font-semibold">{nameOf(partyId)}</dt>
               <dd className="pb-2 sm:pt-2">
-                {standing?.byPartyId === partyId ? <>offers <strong>{weekdayDayMonth(standing.onDay)}</strong>{standing.words && <>: “{standing.words}”</>}</>
-                : answered ? <span className="text-lead-grey">has not answered</span>
-                : latest?.state === 'accepted' || handoff.agreedOn ? <>agreed to {handoff.agreedOn && <RelativeDay day={handoff.agreedOn} today={today} />}</>
-                : latest?.state === 'declined' ? <>offered {shortDay(latest.onDay)}, declined: “{latest.reason}”</>
-                : <span className="text-lead-grey">has offered no day</span>}
+                {standing?.byPartyId === partyId ? (
+                  <>
+                    offers <strong>{weekdayDayMonth(standing.onDay)}</strong>
+                    {standing.words && <>: “{standing.words}”</>}
+                  </>
+                ) : answered ? (
+                  <span className="text-lead-grey">has not answered</span>
+                ) : latest?.state === 'accepted' || handoff.agreedOn ? (
+                  <>agreed to {handoff.agreedOn && <RelativeDay day={handoff.agreedOn} today={today} />}</>
+                ) : latest?.state === 'declined' ? (
+                  <>
+                    offered {shortDay(latest.onDay)}, declined: “{latest.reason}”
+                  </>
+                ) : (
+                  <span className="text-lead-grey">has offered no day</span>
+                )}
               </dd>
             </div>
           );
@@ -205,14 +272,23 @@ export function HandoffSheet({ commissionId, handoffId, today }: { commissionId:
         {handoff.transitDays === 1 ? '1 working day' : `${handoff.transitDays} working days`} on the way.
         {handoff.agreedOn && standing && ` ${shortDay(handoff.agreedOn)} stays agreed until the new day is accepted.`}
       </p>
-      {mayOffer && (standing ? (ownOffer ? <OwnOffer {...shared} /> : <AnswerOffer {...shared} />) : (
-        handoff.agreedOn ? (
+      {mayOffer &&
+        (standing ? (
+          ownOffer ? (
+            <OwnOffer {...shared} />
+          ) : (
+            <AnswerOffer {...shared} />
+          )
+        ) : handoff.agreedOn ? (
           <details>
-            <summary className="min-h-thumb cursor-pointer py-2 font-semibold text-brass">Ask to move the agreed day</summary>
+            <summary className="min-h-thumb cursor-pointer py-2 font-semibold text-brass">
+              Ask to move the agreed day
+            </summary>
             <OfferDay {...shared} countering={false} />
           </details>
-        ) : <OfferDay {...shared} countering={false} />
-      ))}
+        ) : (
+          <OfferDay {...shared} countering={false} />
+        ))}
       {mayDo(ability, 'receive', 'Handoff', facts) && handoff.agreedOn && !handoff.doneOn && <Receive {...shared} />}
       {handoff.offers && handoff.offers.length > 0 && (
         <details className="mt-3">
@@ -220,8 +296,10 @@ export function HandoffSheet({ commissionId, handoffId, today }: { commissionId:
           <ol className="grid gap-1 text-note text-lead-grey">
             {handoff.offers.map((offer) => (
               <li key={offer.id}>
-                {nameOf(offer.byPartyId)} ({offer.byName}) offered {shortDay(offer.onDay)}, {shortInstant(offer.at)}: {offer.state}
-                {offer.answeredBy && ` by ${offer.answeredBy}`}{offer.reason && `, “${offer.reason}”`}
+                {nameOf(offer.byPartyId)} ({offer.byName}) offered {shortDay(offer.onDay)}, {shortInstant(offer.at)}:{' '}
+                {offer.state}
+                {offer.answeredBy && ` by ${offer.answeredBy}`}
+                {offer.reason && `, “${offer.reason}”`}
               </li>
             ))}
           </ol>

@@ -38,11 +38,24 @@ export function FitSheet({ joint, readings, unit }: FitSheetProps) {
         hole={{ name: names.hole, agreed: hole.agreed, readingsUm: hole.readingsUm }}
         shaft={{ name: names.shaft, agreed: shaft.agreed, readingsUm: shaft.readingsUm }}
       />
-      <MeasureTable caption={cut ? `To reach ${joint.handFit ? `a ${joint.handFit} fit` : 'the agreed clearance'}` : 'Clearance on diameter'}>
-        <MeasureRow label="Clearance agreed" value={`${formatMm(joint.clearanceMinUm / 1000)} – ${formatMm(joint.clearanceMaxUm / 1000)}`} />
+      <MeasureTable
+        caption={
+          cut
+            ? `To reach ${joint.handFit ? `a ${joint.handFit} fit` : 'the agreed clearance'}`
+            : 'Clearance on diameter'
+        }
+      >
+        <MeasureRow
+          label="Clearance agreed"
+          value={`${formatMm(joint.clearanceMinUm / 1000)} – ${formatMm(joint.clearanceMaxUm / 1000)}`}
+        />
         {result && (
           <>
-            <MeasureRow label="Worst pair now" value={formatMm(result.worstPairUm / 1000)} tone={result.verdict === 'does-not-conform' ? 'oxide' : 'plain'} />
+            <MeasureRow
+              label="Worst pair now"
+              value={formatMm(result.worstPairUm / 1000)}
+              tone={result.verdict === 'does-not-conform' ? 'oxide' : 'plain'}
+            />
             <MeasureRow label="Mean" value={formatMm(result.meanClearanceUm / 1000)} />
             <MeasureRow label="Gauge doubt (k = 2)" value={`±${formatMm(result.doubtUm / 1000)}`} />
             <MeasureRow label={`Spread of the ${names.hole}`} value={formatUm(result.hole.spreadUm)} />
@@ -51,19 +64,32 @@ export function FitSheet({ joint, readings, unit }: FitSheetProps) {
         )}
         {cut && (
           <>
-            <MeasureRow emphasised label={`Take off the ${names.shaft}, on diameter`} value={formatMm(removal.onDiameterUm / 1000)} />
+            <MeasureRow
+              emphasised
+              label={`Take off the ${names.shaft}, on diameter`}
+              value={formatMm(removal.onDiameterUm / 1000)}
+            />
             <MeasureRow label="per side" value={formatMm(removal.perSideUm / 1000)} />
-            <MeasureRow label="least and most that reach the range" value={`${formatMm(removal.leastOnDiameterUm / 1000)} – ${formatMm(removal.mostOnDiameterUm / 1000)}`} />
+            <MeasureRow
+              label="least and most that reach the range"
+              value={`${formatMm(removal.leastOnDiameterUm / 1000)} – ${formatMm(removal.mostOnDiameterUm / 1000)}`}
+            />
             {joint.hiddenLengthMm !== null && joint.engagementMm !== null && (
-              <MeasureRow label="over, stopping short of what shows" value={`${joint.hiddenLengthMm} of ${joint.engagementMm} mm`} />
+              <MeasureRow
+                label="over, stopping short of what shows"
+                value={`${joint.hiddenLengthMm} of ${joint.engagementMm} mm`}
+              />
             )}
           </>
         )}
       </MeasureTable>
-      {!result && <p className="py-3 text-note text-lead-grey">Both sides have to be measured before the fit can be judged.</p>}
+      {!result && (
+        <p className="py-3 text-note text-lead-grey">Both sides have to be measured before the fit can be judged.</p>
+      )}
       {removal?.spreadTooWide && (
         <p className="py-3 text-note">
-          The parts are further from round or straight ({formatUm(removal.thenLoosestPairUm - removal.thenWorstPairUm)} together) than the agreed range is wide. Size alone will leave it loose in places.
+          The parts are further from round or straight ({formatUm(removal.thenLoosestPairUm - removal.thenWorstPairUm)}{' '}
+          together) than the agreed range is wide. Size alone will leave it loose in places.
         </p>
       )}
       {result && joint.engagementMm !== null && (
@@ -75,13 +101,22 @@ export function FitSheet({ joint, readings, unit }: FitSheetProps) {
           shaftDiameterMm={result.shaft.maxMm}
           engagementMm={joint.engagementMm}
           wallMm={joint.nominalMm * 0.12}
-          removal={cut ? { from: 'shaft', onDiameterMm: removal.onDiameterUm / 1000, overLengthMm: joint.hiddenLengthMm ?? joint.engagementMm } : null}
+          removal={
+            cut
+              ? {
+                  from: 'shaft',
+                  onDiameterMm: removal.onDiameterUm / 1000,
+                  overLengthMm: joint.hiddenLengthMm ?? joint.engagementMm,
+                }
+              : null
+          }
           formatLength={(valueMm) => formatLength(valueMm, unit)}
         />
       )}
       {cut && (
         <Caution>
-          Thin-walled work in a chuck can grip, crush or let go: support it, wear eye protection, follow the lathe maker's instructions and your local rules.
+          Thin-walled work in a chuck can grip, crush or let go: support it, wear eye protection, follow the lathe
+          maker's instructions and your local rules.
         </Caution>
       )}
     </Sheet>

@@ -29,14 +29,24 @@ function troubleWith(text: string, unit: LengthUnit, nominalMm: number): string 
   if (text.trim() === '') return undefined;
   const read = parseLength(text, unit);
   if (!read.ok) return read.message;
-  return looksLikeUnitMixUp(read.valueMm, nominalMm) ? `${formatMm(read.valueMm)} is far from ${formatMm(nominalMm)}; check the unit` : undefined;
+  return looksLikeUnitMixUp(read.valueMm, nominalMm)
+    ? `${formatMm(read.valueMm)} is far from ${formatMm(nominalMm)}; check the unit`
+    : undefined;
 }
 
 /**
  * Readings of one side, typed or sent by a caliper that types like a keyboard: value, Enter, next field. A column pasted
  * into a field fills the fields below it. The texts are kept as a draft until they are saved.
  */
-export function ReadingEntry({ commissionId, jointId, nominalMm, sideNames, preferredUnit, reportId, onDone }: ReadingEntryProps) {
+export function ReadingEntry({
+  commissionId,
+  jointId,
+  nominalMm,
+  sideNames,
+  preferredUnit,
+  reportId,
+  onDone,
+}: ReadingEntryProps) {
   const [draft, setDraft, forgetDraft] = useDraft(`readings-${jointId}`, '');
   const [side, setSide] = useState<JointSide>('hole');
   const [unit, setUnit] = useState<LengthUnit>(preferredUnit);
@@ -77,8 +87,12 @@ export function ReadingEntry({ commissionId, jointId, nominalMm, sideNames, pref
         save.run({
           params: { commissionId, jointId },
           body: {
-            side, reportId, resolutionUm: Number(resolution.replace(',', '.')), gauge: gauge.trim() || null,
-            temperatureC: numberOrNull(temperature), humidityPct: numberOrNull(humidity),
+            side,
+            reportId,
+            resolutionUm: Number(resolution.replace(',', '.')),
+            gauge: gauge.trim() || null,
+            temperatureC: numberOrNull(temperature),
+            humidityPct: numberOrNull(humidity),
             readings: filled.map((text) => ({ text, unit })),
           },
         });
@@ -99,7 +113,12 @@ export function ReadingEntry({ commissionId, jointId, nominalMm, sideNames, pref
           </Select>
         </Field>
         <Field label="Smallest step of the gauge, µm" hint="10 for a digital caliper, 1 for a micrometer">
-          <TextInput inputMode="decimal" value={resolution} onChange={(event) => setResolution(event.target.value)} required />
+          <TextInput
+            inputMode="decimal"
+            value={resolution}
+            onChange={(event) => setResolution(event.target.value)}
+            required
+          />
         </Field>
       </div>
       <ol ref={list} className="grid gap-3 sm:grid-cols-2" aria-label={`Readings of the ${sideNames[side]}`}>
@@ -107,26 +126,40 @@ export function ReadingEntry({ commissionId, jointId, nominalMm, sideNames, pref
           // Fields have no identity but their place: readings are a column of figures.
           <li key={index}>
             <Field label={`Reading ${index + 1}`} error={troubleWith(text, unit, nominalMm)}>
-              <LengthInput value={text} unit={unit === 'mm' ? 'mm' : 'in'} onChange={(event) => setText(index, event.target.value)} onPaste={(event) => {
-                const pasted = event.clipboardData.getData('text');
-                if (!/[\r\n\t]/.test(pasted)) return;
-                event.preventDefault();
-                setText(index, pasted);
-              }} onLastEnter={addField} />
+              <LengthInput
+                value={text}
+                unit={unit === 'mm' ? 'mm' : 'in'}
+                onChange={(event) => setText(index, event.target.value)}
+                onPaste={(event) => {
+                  const pasted = event.clipboardData.getData('text');
+                  if (!/[\r\n\t]/.test(pasted)) return;
+                  event.preventDefault();
+                  setText(index, pasted);
+                }}
+                onLastEnter={addField}
+              />
             </Field>
           </li>
         ))}
       </ol>
       <div className="grid gap-4 sm:grid-cols-3">
-        <Field label="Gauge" optional><TextInput value={gauge} maxLength={60} onChange={(event) => setGauge(event.target.value)} /></Field>
-        <Field label="Temperature, °C" optional><TextInput inputMode="decimal" value={temperature} onChange={(event) => setTemperature(event.target.value)} /></Field>
-        <Field label="Humidity, %" optional><TextInput inputMode="decimal" value={humidity} onChange={(event) => setHumidity(event.target.value)} /></Field>
+        <Field label="Gauge" optional>
+          <TextInput value={gauge} maxLength={60} onChange={(event) => setGauge(event.target.value)} />
+        </Field>
+        <Field label="Temperature, °C" optional>
+          <TextInput inputMode="decimal" value={temperature} onChange={(event) => setTemperature(event.target.value)} />
+        </Field>
+        <Field label="Humidity, %" optional>
+          <TextInput inputMode="decimal" value={humidity} onChange={(event) => setHumidity(event.target.value)} />
+        </Field>
       </div>
       <div className="flex flex-wrap items-center gap-3">
         <Button type="submit" busy={save.pending} disabled={filled.length === 0 || inTrouble}>
           Save {filled.length === 1 ? '1 reading' : `${filled.length} readings`}
         </Button>
-        <Button variant="outline" onClick={addField}>One more reading</Button>
+        <Button variant="outline" onClick={addField}>
+          One more reading
+        </Button>
         {draft !== '' && <span className="text-note text-lead-grey">draft kept</span>}
       </div>
       <ProblemNotice problem={save.problem} />

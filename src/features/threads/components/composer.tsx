@@ -24,7 +24,8 @@ export interface ComposerProps {
 
 type Named = PartyView['people'][number];
 
-const mentionedIn = (text: string, people: readonly Named[]): string[] => people.filter((person) => text.includes(`@${person.displayName}`)).map((person) => person.accountId);
+const mentionedIn = (text: string, people: readonly Named[]): string[] =>
+  people.filter((person) => text.includes(`@${person.displayName}`)).map((person) => person.accountId);
 
 /** The word after an @ at the end of the text, while it could still become a name. */
 const nameBegun = (text: string): string | null => /(?:^|\s)@([\p{L}' -]{0,30})$/u.exec(text)?.[1] ?? null;
@@ -49,7 +50,10 @@ export function Composer({ commissionId, threadId, audience, readers, onTyped, o
   });
   const people = readers.flatMap((party) => party.people);
   const begun = nameBegun(text);
-  const offered = begun === null ? [] : people.filter((person) => person.displayName.toLowerCase().startsWith(begun.toLowerCase())).slice(0, 5);
+  const offered =
+    begun === null
+      ? []
+      : people.filter((person) => person.displayName.toLowerCase().startsWith(begun.toLowerCase())).slice(0, 5);
   const stored = uploads.files.filter((file) => file.state === 'stored');
   const onTheWay = uploads.files.some((file) => file.state === 'sending');
   const empty = text.trim() === '' && stored.length === 0;
@@ -57,7 +61,12 @@ export function Composer({ commissionId, threadId, audience, readers, onTyped, o
     if (empty || onTheWay || post.pending) return;
     post.run({
       params: { commissionId, threadId },
-      body: { id: messageId, body: text, mentionedAccountIds: mentionedIn(text, people), fileIds: stored.map((file) => file.id) },
+      body: {
+        id: messageId,
+        body: text,
+        mentionedAccountIds: mentionedIn(text, people),
+        fileIds: stored.map((file) => file.id),
+      },
     });
   };
   const choose = (person: Named): void => {
@@ -78,7 +87,14 @@ export function Composer({ commissionId, threadId, audience, readers, onTyped, o
         uploads.add([...event.dataTransfer.files]);
       }}
     >
-      <Field label="Write" hint={<>Read by: <strong>{audience}</strong></>}>
+      <Field
+        label="Write"
+        hint={
+          <>
+            Read by: <strong>{audience}</strong>
+          </>
+        }
+      >
         <TextArea
           ref={area}
           value={text}
@@ -103,14 +119,26 @@ export function Composer({ commissionId, threadId, audience, readers, onTyped, o
       {offered.length > 0 && (
         <ul className="flex flex-wrap gap-2" aria-label="Name someone">
           {offered.map((person) => (
-            <li key={person.accountId}><Button variant="outline" onClick={() => choose(person)}>{person.displayName}</Button></li>
+            <li key={person.accountId}>
+              <Button variant="outline" onClick={() => choose(person)}>
+                {person.displayName}
+              </Button>
+            </li>
           ))}
         </ul>
       )}
       <PendingFiles uploads={uploads} />
       <div className="flex flex-wrap items-center gap-2">
-        <Button type="submit" busy={post.pending} disabled={empty || onTheWay}>Send</Button>
-        <FilePicker accept="image/jpeg,image/png,image/webp,image/avif,video/mp4,video/quicktime,application/pdf" multiple onFiles={uploads.add}>Add pictures or files</FilePicker>
+        <Button type="submit" busy={post.pending} disabled={empty || onTheWay}>
+          Send
+        </Button>
+        <FilePicker
+          accept="image/jpeg,image/png,image/webp,image/avif,video/mp4,video/quicktime,application/pdf"
+          multiple
+          onFiles={uploads.add}
+        >
+          Add pictures or files
+        </FilePicker>
         {text !== '' && <span className="text-note text-lead-grey">draft kept</span>}
       </div>
       <ProblemNotice problem={post.problem} />

@@ -8,20 +8,30 @@ import { threadQueries } from '../../../lib/queries/threads.ts';
 import { shortInstant } from '../../../lib/today.ts';
 import { audienceWords } from '../audience-words.ts';
 
-const SUBJECT_WORDS: Readonly<Record<ThreadSubject, string>> = { commission: 'the whole piece', leg: 'a leg', joint: 'a joint', report: 'a fit report', handoff: 'a handoff' };
+const SUBJECT_WORDS: Readonly<Record<ThreadSubject, string>> = {
+  commission: 'the whole piece',
+  leg: 'a leg',
+  joint: 'a joint',
+  report: 'a fit report',
+  handoff: 'a handoff',
+};
 
 /** Threads the reader may read, the unread ones marked. */
 export function ThreadList({ commissionId }: { commissionId: string }) {
   const { data: threads } = useSuspenseQuery(threadQueries.list(commissionId));
   const { parties } = usePartyBook(commissionId);
-  if (threads.length === 0) return <EmptyState title="No threads yet">Conversations about this piece will be listed here.</EmptyState>;
+  if (threads.length === 0)
+    return <EmptyState title="No threads yet">Conversations about this piece will be listed here.</EmptyState>;
   return (
     <ul>
       {threads.map((thread) => {
         const unread = thread.lastSequence - thread.readSequence;
         return (
           <li key={thread.id} className="border-b border-hairline py-3 last:border-b-0">
-            <Link to={`/commissions/${commissionId}/threads/${thread.id}`} className={`underline decoration-hairline underline-offset-4 ${unread > 0 ? 'font-semibold' : ''}`}>
+            <Link
+              to={`/commissions/${commissionId}/threads/${thread.id}`}
+              className={`underline decoration-hairline underline-offset-4 ${unread > 0 ? 'font-semibold' : ''}`}
+            >
               {thread.title}
             </Link>
             <p className="flex flex-wrap items-center gap-2 text-note text-lead-grey">

@@ -19,11 +19,22 @@ import { Composer } from './composer.tsx';
 import { MessageRow } from './message-row.tsx';
 
 /** A conversation, live: its audience always in sight, who is here, and the messages in their one order. */
-export function ThreadSheet({ commissionId, thread, headingLevel = 2 }: { commissionId: string; thread: ThreadView; headingLevel?: 2 | 3 }) {
+export function ThreadSheet({
+  commissionId,
+  thread,
+  headingLevel = 2,
+}: {
+  commissionId: string;
+  thread: ThreadView;
+  headingLevel?: 2 | 3;
+}) {
   const { data: me } = useSuspenseQuery(meQuery());
   const { ability } = useSight(commissionId);
   const { parties, nameOf } = usePartyBook(commissionId);
-  const { messages, lastSequence, pending, failed, hasOlder, loadingOlder, showOlder } = useThreadMessages(commissionId, thread.id);
+  const { messages, lastSequence, pending, failed, hasOlder, loadingOlder, showOlder } = useThreadMessages(
+    commissionId,
+    thread.id,
+  );
   const { here, typed, stopTyping } = usePresence(commissionId, thread.id, me.id);
   const marked = useRef(thread.readSequence);
   const audience = audienceWords(thread, parties);
@@ -34,25 +45,56 @@ export function ThreadSheet({ commissionId, thread, headingLevel = 2 }: { commis
     if (lastSequence <= marked.current || document.visibilityState !== 'visible') return;
     marked.current = lastSequence;
     // A mark that is lost is made up by the next one: it only ever moves forward.
-    api(markThreadRead, { params: { commissionId, threadId: thread.id }, body: { readSequence: lastSequence } }).catch(() => undefined);
+    api(markThreadRead, { params: { commissionId, threadId: thread.id }, body: { readSequence: lastSequence } }).catch(
+      () => undefined,
+    );
   }, [commissionId, thread.id, lastSequence]);
 
   return (
-    <Sheet title={thread.title} headingLevel={headingLevel} stamp={<Stamp tone={thread.audience === 'everyone' ? 'gun-blue' : 'verdigris'}>{audience}</Stamp>}>
-      {failed && <Notice kind="alert" tone="oxide" title="The messages could not be read">What you write is kept. They come as soon as the connection is back.</Notice>}
+    <Sheet
+      title={thread.title}
+      headingLevel={headingLevel}
+      stamp={<Stamp tone={thread.audience === 'everyone' ? 'gun-blue' : 'verdigris'}>{audience}</Stamp>}
+    >
+      {failed && (
+        <Notice kind="alert" tone="oxide" title="The messages could not be read">
+          What you write is kept. They come as soon as the connection is back.
+        </Notice>
+      )}
       {pending && !failed && <Skeleton label="Reading the messages" lines={3} />}
-      {hasOlder && <Button variant="quiet" busy={loadingOlder} onClick={showOlder}>Show earlier messages</Button>}
+      {hasOlder && (
+        <Button variant="quiet" busy={loadingOlder} onClick={showOlder}>
+          Show earlier messages
+        </Button>
+      )}
       {!pending && messages.length === 0 && <EmptyState title="Nothing written yet">Read by: {audience}.</EmptyState>}
       <ol aria-label={`Messages in ${thread.title}`} role="log" data-testid={`thread-${thread.audience}`}>
         {messages.map((message) => (
-          <MessageRow key={message.id} message={message} commissionId={commissionId} partyName={nameOf(message.authorPartyId)} namesYou={message.mentionedAccountIds.includes(me.id)} />
+          <MessageRow
+            key={message.id}
+            message={message}
+            commissionId={commissionId}
+            partyName={nameOf(message.authorPartyId)}
+            namesYou={message.mentionedAccountIds.includes(me.id)}
+          />
         ))}
       </ol>
       <p className="min-h-6 py-1 text-note text-lead-grey" aria-live="polite">
-        {typing.length > 0 ? `${typing.join(', ')} ${typing.length === 1 ? 'is' : 'are'} writing` : here.length > 0 ? `Here now: ${here.map((person) => person.displayName).join(', ')}` : ''}
+        {typing.length > 0
+          ? `${typing.join(', ')} ${typing.length === 1 ? 'is' : 'are'} writing`
+          : here.length > 0
+            ? `Here now: ${here.map((person) => person.displayName).join(', ')}`
+            : ''}
       </p>
       {mayDo(ability, 'post', 'Thread', facts) && (
-        <Composer commissionId={commissionId} threadId={thread.id} audience={audience} readers={readersOf(thread, parties)} onTyped={typed} onSent={stopTyping} />
+        <Composer
+          commissionId={commissionId}
+          threadId={thread.id}
+          audience={audience}
+          readers={readersOf(thread, parties)}
+          onTyped={typed}
+          onSent={stopTyping}
+        />
       )}
     </Sheet>
   );

@@ -1,0 +1,83 @@
+import { hashKey, type QueryClient, type QueryKey } from '@tanstack/react-query';
+import { REALTIME_EVENTS, type RealtimeEvents, type RealtimeName } from '../../shared/realtime/events.ts';
+import { keys } from '../lib/query-keys.ts';
+import { onConnected, onRealtime } from '../lib/socket.ts';
+
+type Invalidations = { [N in RealtimeName]: (event: RealtimeEvents[N]) => readonly QueryKey[] };
+
+/** Which queries each event makes stale. An event without a line here does not compile. */
+export const INVALIDATIONS: Invalidations = {
+  'commission.changed': ({ commissionId }) => [keys.commissions.detail(commissionId), keys.commissions.lists()],
+  'parties.changed': ({ commissionId }) => [
+    keys.parties.list(commissionId),
+    keys.commissions.detail(commissionId),
+    keys.commissions.lists(),
+  ],
+  'parts.changed': ({ commissionId }) => [keys.parts.list(commissionId)],
+  'legs.changed': ({ commissionId }) => [keys.legs.list(commissionId), keys.history.list(commissionId), keys.bench()],
+  'joint.changed': ({ commissionId, jointId }) => [
+    keys.joints.lists(commissionId),
+    keys.joints.detail(commissionId, jointId),
+  ],
+  'fit-report.changed': ({ commissionId, reportId, jointId }) => [
+    keys.fitReports.lists(commissionId),
+    keys.fitReports.detail(commissionId, reportId),
+    keys.joints.lists(commissionId),
+    keys.joints.detail(commissionId, jointId),
+    keys.bench(),
+  ],
+  'consent.changed': ({ commissionId }) => [keys.consents.list(commissionId), keys.bench()],
+  'handoff.changed': ({ commissionId, handoffId }) => [
+    keys.handoffs.lists(commissionId),
+    keys.handoffs.detail(commissionId, handoffId),
+    keys.history.list(commissionId),
+    keys.bench(),
+  ],
+  'standing.changed': ({ commissionId }) => [keys.standing.detail(commissionId), keys.commissions.lists()],
+  'thread.opened': ({ commissionId }) => [keys.threads.lists(commissionId)],
+  // Messages themselves come through the thread's follower, by sequence.
+  'thread.message-added': ({ commissionId }) => [keys.threads.lists(commissionId), keys.bench()],
+  'files.changed': ({ commissionId }) => [keys.files.all(commissionId)],
+  'membership.changed': ({ commissionId }) => [
+    keys.me(),
+    keys.commission(commissionId),
+    keys.commissions.lists(),
+    keys.bench(),
+  ],
+};
+
+/** Events of one act come close together: they are gathered this long and each key goes stale once. */
+const WINDOW_MS = 250;
+
+/** Gathers keys and makes each stale once per window. */
+export function createBatch(
+  queryClient: Pick<QueryClient, 'invalidateQueries'>,
+  windowMs = WINDOW_MS,
+): (queryKeys: readonly QueryKey[]) => void {
+  const waiting = new Map<string, QueryKey>();
+  let timer: ReturnType<typeof setTimeout> | undefined;
+  return (queryKeys) => {
+    for (const key of queryKeys) waiting.set(hashKey(key), key);
+    timer ??= setTimeout(() => {
+      timer = undefined;
+      const batch = [...waiting.values()];
+      waiting.clear();
+      for (const queryKey of batch) void queryClient.invalidateQueries({ queryKey });
+    }, windowMs);
+  };
+}
+
+/** Ties the server's events to the query cache for as long as the page lives. */
+export function followRealtime(queryClient: QueryClient): void {
+  const add = createBatch(queryClient);
+  const follow = <N extends RealtimeName>(name: N): void => {
+    onRealtime(name, (event) => add(INVALIDATIONS[name](event)));
+  };
+  for (const name of Object.keys(REALTIME_EVENTS) as RealtimeName[]) follow(name);
+  let first = true;
+  // Events are sent at most once: after a break everything on the page is asked for again. Threads ask by sequence.
+  onConnected(() => {
+    if (!first) void queryClient.invalidateQueries({ predicate: (query) => !query.queryKey.includes('messages') });
+    first = false;
+  });
+}

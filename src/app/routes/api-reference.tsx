@@ -1,0 +1,3 @@
+import { ReferencePage } from '../../features/api-reference/reference-page.tsx';
+
+export const Component = () => <ReferencePage />;

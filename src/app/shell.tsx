@@ -1,0 +1,196 @@
+import { useQueryClient, useSuspenseQuery } from '@tanstack/react-query';
+import { Suspense, useEffect, useRef, useSyncExternalStore } from 'react';
+import { Form, Link, NavLink, Outlet, useLocation, useNavigate, useSearchParams } from 'react-router-dom';
+import { signOut } from '../../shared/contracts/accounts.ts';
+import { BrandMark } from '../components/ui/brand-mark.tsx';
+import { Menu, MenuChoices, MenuItem, MenuSeparator } from '../components/ui/menu.tsx';
+import { Notice } from '../components/ui/notice.tsx';
+import { Skeleton } from '../components/ui/skeleton.tsx';
+import { SkipLink, stripLinkClass, TopStrip } from '../components/ui/top-strip.tsx';
+import { api } from '../lib/api.ts';
+import { benchQuery } from '../lib/queries/commissions.ts';
+import { meQuery } from '../lib/queries/me.ts';
+import { closeRealtime, connectionState, openRealtime } from '../lib/socket.ts';
+import { chooseTheme, chosenTheme, THEMES } from '../lib/theme.ts';
+import { useState } from 'react';
+
+/** "Not connected" is said only when it lasts: a page that has just opened is still connecting. */
+const PATIENCE_MS = 4000;
+
+function ConnectionLine() {
+  const up = useSyncExternalStore(connectionState.subscribe, connectionState.get);
+  const [late, setLate] = useState(false);
+  useEffect(() => {
+    const timer = setTimeout(() => setLate(!up), up ? 0 : PATIENCE_MS);
+    return () => clearTimeout(timer);
+  }, [up]);
+  return !up && late ? (
+    <Notice tone="brass">
+      Not connected. What you write is kept, and sent when you try again after the connection is back.
+    </Notice>
+  ) : null;
+}
+
+function PersonMenu() {
+  const { data: me } = useSuspenseQuery(meQuery());
+  const navigate = useNavigate();
+  const queryClient = useQueryClient();
+  const [theme, setTheme] = useState(chosenTheme());
+  const leave = async (): Promise<void> => {
+    await api(signOut, {});
+    closeRealtime();
+    queryClient.clear();
+    await navigate('/sign-in');
+  };
+  return (
+    <Menu
+      trigger={
+        <button type="button" className={stripLinkClass(false)}>
+          {me.displayName}
+        </button>
+      }
+    >
+      <MenuItem asChild>
+        <Link to="/account">Account</Link>
+      </MenuItem>
+      {me.shops.map((shop) => (
+        <MenuItem key={shop.shopId} asChild>
+          <Link to={`/shops/${shop.shopId}`}>{shop.name}</Link>
+        </MenuItem>
+      ))}
+      {me.isSteward && (
+        <MenuItem asChild>
+          <Link to="/shops">All shops</Link>
+        </MenuItem>
+      )}
+      <MenuItem asChild>
+        <Link to="/api-reference">API reference</Link>
+      </MenuItem>
+      <MenuSeparator />
+      <MenuChoices
+        label="Light"
+        value={theme}
+        options={THEMES}
+        onChoose={(next) => {
+          chooseTheme(next);
+          setTheme(next);
+        }}
+      />
+      <MenuSeparator />
+      <MenuItem onSelect={() => void leave()}>Sign out</MenuItem>
+    </Menu>
+  );
+}
+
+function Search() {
+  const [params] = useSearchParams();
+  const asked = params.get('search') ?? '';
+  return (
+    <Form action="/commissions" role="search">
+      <input
+        key={asked}
+        type="search"
+        name="search"
+        defaultValue={asked}
+        aria-label="Find a piece"
+        placeholder="Find a piece, a client or a code"
+        className="min-h-thumb w-full rounded border border-edge bg-bone px-3 text-body"
+      />
+    </Form>
+  );
+}
+
+function Unread() {
+  const { data } = useSuspenseQuery(benchQuery());
+  return data.unreadThreads > 0 ? (
+    <Link to="/" className={stripLinkClass(false)}>
+      Unread <strong>{data.unreadThreads}</strong>
+    </Link>
+  ) : null;
+}
+
+/** Moves the focus to the page's heading after a change of page, and names the page in the title. */
+function useArrival(): void {
+  const { pathname } = useLocation();
+  const first = useRef(true);
+  useEffect(() => {
+    const arrive = (): boolean => {
+      const heading = document.querySelector('h1');
+      if (!heading) return false;
+      document.title = `${heading.textContent} · Ferrule`;
+      if (!first.current) {
+        heading.tabIndex = -1;
+        heading.focus({ preventScroll: true });
+      }
+      first.current = false;
+      return true;
+    };
+    if (arrive()) return;
+    const watcher = new MutationObserver(() => {
+      if (arrive()) watcher.disconnect();
+    });
+    watcher.observe(document.body, { childList: true, subtree: true });
+    return () => watcher.disconnect();
+  }, [pathname]);
+}
+
+function Frame() {
+  const { data: me } = useSuspenseQuery(meQuery());
+  const isClientOnly = me.shops.length === 0 && !me.isSteward;
+  useArrival();
+  useEffect(() => void openRealtime(), []);
+  return (
+    <>
+      <SkipLink target="page" />
+      <TopStrip
+        homeLink={(mark) => (
+          <Link to="/" aria-label="Ferrule, to the bench">
+            {mark}
+          </Link>
+        )}
+        nav={
+          <>
+            <NavLink to="/" end className={({ isActive }) => stripLinkClass(isActive)}>
+              {isClientOnly ? 'My pieces' : 'My bench'}
+            </NavLink>
+            <NavLink to="/commissions" className={({ isActive }) => stripLinkClass(isActive)}>
+              Commissions
+            </NavLink>
+          </>
+        }
+        search={<Search />}
+        notices={
+          <Suspense fallback={null}>
+            <Unread />
+          </Suspense>
+        }
+        person={<PersonMenu />}
+      />
+      <ConnectionLine />
+      <Suspense
+        fallback={
+          <div className="p-6">
+            <Skeleton label="Fetching the page" lines={5} />
+          </div>
+        }
+      >
+        <Outlet />
+      </Suspense>
+    </>
+  );
+}
+
+/** The frame of every page behind the sign-in. */
+export function SignedInShell() {
+  return (
+    <Suspense
+      fallback={
+        <div className="p-6">
+          <BrandMark />
+        </div>
+      }
+    >
+      <Frame />
+    </Suspense>
+  );
+}
