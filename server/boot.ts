@@ -46,7 +46,7 @@ export async function startProcess(
     db,
     log,
     storage: createStorage(env),
-    limits: createLimits(db, env.RELAXED_LIMITS ? 1000 : 1),
+    limits: createLimits(env.DATABASE_URL, env.RELAXED_LIMITS ? 1000 : 1),
     clock,
     wakeRelay: () => relay.wake(),
     endConnections: (accountId) => hub.disconnectAccount(accountId),
@@ -90,6 +90,7 @@ export async function startProcess(
       clearTimeout(cut);
       await relay.stop();
       session.close();
+      await services.limits.close();
       await db.destroy();
     },
   };

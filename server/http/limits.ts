@@ -1,7 +1,6 @@
 import { createHash } from 'node:crypto';
+import pg from 'pg';
 import { RateLimiterPostgres, RateLimiterRes } from 'rate-limiter-flexible';
-import type { DataSource } from 'typeorm';
-import { poolOf } from '../db/data-source.ts';
 import { AppError } from '../errors.ts';
 
 interface DoorPlan {
@@ -35,6 +34,7 @@ export interface Limits {
   take(door: Door, key: string): Promise<void>;
   /** Forgets the tries of a key, after a success. */
   forget(door: Door, key: string): Promise<void>;
+  close(): Promise<void>;
 }
 
 const ONE_DAY_S = 24 * 60 * 60;
@@ -42,11 +42,23 @@ const ONE_DAY_S = 24 * 60 * 60;
 /** Keys hold addresses of people: the table gets their hash, which also keeps a long one within its column. */
 const hidden = (key: string): string => createHash('sha256').update(key).digest('base64url');
 
-/** @param factor multiplies every allowance; browser tests sign in far more often than people. */
-export function createLimits(db: DataSource, factor = 1): Limits {
+/**
+ * The counters have two connections of their own: tries are counted inside transactions too, and transactions that wait
+ * for a second connection of the same pool can wait for one another.
+ * @param factor multiplies every allowance; browser tests sign in far more often than people.
+ */
+export function createLimits(databaseUrl: string, factor = 1): Limits {
+  const pool = new pg.Pool({
+    connectionString: databaseUrl,
+    max: 2,
+    connectionTimeoutMillis: 10_000,
+    application_name: 'ferrule limits',
+  });
+  // An idle connection that breaks is replaced at the next try; unheard, the event would end the process.
+  pool.on('error', () => undefined);
   const limiter = (keyPrefix: string, points: number, durationS: number, blockS: number): RateLimiterPostgres =>
     new RateLimiterPostgres({
-      storeClient: poolOf(db),
+      storeClient: pool,
       storeType: 'pool',
       tableName: 'rate_limit',
       tableCreated: true,
@@ -91,5 +103,6 @@ export function createLimits(db: DataSource, factor = 1): Limits {
       await doors.get(door)?.delete(hiddenKey);
       await waits.get(door)?.delete(hiddenKey);
     },
+    close: () => pool.end(),
   };
 }
