@@ -90,13 +90,15 @@ export class OutboxRelay {
     try {
       await this.#handlers[kind](message);
       // A letter's payload holds the token of its link, which is nowhere else but hashed; it goes once the letter is out.
-      await this.#db.query(`UPDATE "outbox_message" SET "sent_at" = now(), "payload" = '{}'::jsonb WHERE "id" = $1`, [message.id]);
+      await this.#db.query(`UPDATE "outbox_message" SET "sent_at" = now(), "payload" = '{}'::jsonb WHERE "id" = $1`, [
+        message.id,
+      ]);
     } catch (error) {
       this.#log.warn({ err: error, topic: message.topic, attempts: message.attempts }, 'outbox message not sent');
-      await this.#db.query(`UPDATE "outbox_message" SET "leased_until" = now() + make_interval(secs => $2) WHERE "id" = $1`, [
-        message.id,
-        backoffS(message.attempts),
-      ]);
+      await this.#db.query(
+        `UPDATE "outbox_message" SET "leased_until" = now() + make_interval(secs => $2) WHERE "id" = $1`,
+        [message.id, backoffS(message.attempts)],
+      );
     }
   }
 }

@@ -25,7 +25,13 @@ async function isAskedAbout(manager: EntityManager, ability: AppAbility, spot: F
  * Who may read a place may read its files. @throws NotFound when the place may not be seen
  * @param act `read`, or `picture` for adding a file
  */
-export async function authorizeFilePlace(manager: EntityManager, ability: AppAbility, spot: FileSpot, act: 'read' | 'picture', purpose?: string): Promise<EventAudience> {
+export async function authorizeFilePlace(
+  manager: EntityManager,
+  ability: AppAbility,
+  spot: FileSpot,
+  act: 'read' | 'picture',
+  purpose?: string,
+): Promise<EventAudience> {
   const { commissionId, place, placeId } = spot;
   switch (place) {
     case 'thread': {
@@ -35,14 +41,17 @@ export async function authorizeFilePlace(manager: EntityManager, ability: AppAbi
     }
     case 'report': {
       const report = await manager.findOneBy(FitReport, { id: placeId, commissionId });
-      if (act === 'read' && report && purpose === 'before' && (await isAskedAbout(manager, ability, spot))) return { to: 'parties', commissionId, partyIds: [] };
+      if (act === 'read' && report && purpose === 'before' && (await isAskedAbout(manager, ability, spot)))
+        return { to: 'parties', commissionId, partyIds: [] };
       authorize(ability, act, 'FitReport', report);
       return { to: 'parties', commissionId, partyIds: [report.raisedByPartyId, report.answerPartyId] };
     }
     case 'commission': {
-      if (placeId !== commissionId || !mayDo(ability, 'read', 'Commission', { id: commissionId, memberKeys: [] })) throw new NotFound();
+      if (placeId !== commissionId || !mayDo(ability, 'read', 'Commission', { id: commissionId, memberKeys: [] }))
+        throw new NotFound();
       const mayLook = mayDo(ability, 'picture', 'Commission', { id: commissionId, memberKeys: [] });
-      if (!mayLook && (act === 'picture' || !mayDo(ability, 'read', 'Pictures', { commissionId }))) throw new NotPermitted();
+      if (!mayLook && (act === 'picture' || !mayDo(ability, 'read', 'Pictures', { commissionId })))
+        throw new NotPermitted();
       return { to: 'everyone', commissionId };
     }
   }

@@ -8,7 +8,7 @@ export function decodeCursor(cursor: string, length: number): string[] {
   try {
     const values: unknown = JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8'));
     if (Array.isArray(values) && values.length === length && values.every((value) => typeof value === 'string'))
-      return values as string[];
+      return values;
   } catch {
     // falls through to the one answer for a cursor that is not ours
   }

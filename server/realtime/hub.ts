@@ -41,14 +41,11 @@ export class Hub {
       allowRequest: (req, done) =>
         done(
           null,
-          comesFromOwnOrigin(
-            { origin: req.headers.origin, fetchSite: req.headers['sec-fetch-site'] as string | undefined },
-            PUBLIC_ORIGIN,
-          ),
+          comesFromOwnOrigin({ origin: req.headers.origin, fetchSite: req.headers['sec-fetch-site'] }, PUBLIC_ORIGIN),
         ),
     });
     this.io.engine.use(session);
-    this.io.use((socket, next) => void this.#admit(socket as unknown as AppSocket, next));
+    this.io.use((socket, next) => void this.#admit(socket, next));
     this.io.on('connection', (socket) => this.#serve(socket as unknown as AppSocket));
   }
 

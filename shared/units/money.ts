@@ -6,5 +6,10 @@ export const MINOR_DIGITS: Readonly<Record<Currency, number>> = { EUR: 2, USD: 2
 /** "€ 480.00": the amount in the major unit with its symbol. @param amountMinor whole minor units */
 export function formatMinor(amountMinor: number, currency: Currency): string {
   const digits = MINOR_DIGITS[currency];
-  return new Intl.NumberFormat('en-GB', { style: 'currency', currency, minimumFractionDigits: digits, maximumFractionDigits: digits }).format(amountMinor / 10 ** digits);
+  return new Intl.NumberFormat('en-GB', {
+    style: 'currency',
+    currency,
+    minimumFractionDigits: digits,
+    maximumFractionDigits: digits,
+  }).format(amountMinor / 10 ** digits);
 }

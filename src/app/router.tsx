@@ -6,8 +6,11 @@ import { SignedInShell } from './shell.tsx';
 
 type LazyPage = () => Promise<{ Component: () => React.ReactNode }>;
 
-const page = (path: string | undefined, lazy: LazyPage): RouteObject =>
-  ({ ...(path === undefined ? { index: true } : { path }), lazy, ErrorBoundary: RouteProblem }) as RouteObject;
+const page = (path: string | undefined, lazy: LazyPage): RouteObject => ({
+  ...(path === undefined ? { index: true } : { path }),
+  lazy,
+  ErrorBoundary: RouteProblem,
+});
 
 const inCommission: RouteObject[] = [
   page(undefined, () => import('./routes/room.tsx')),

@@ -26,29 +26,27 @@ export function useUploads(target: UploadTarget) {
       },
     );
   };
-  return {
-    files,
-    add(list: readonly File[]): void {
-      for (const file of list) {
-        const id = crypto.randomUUID();
-        setFiles((all) => [...all, { id, name: file.name, share: 0, state: 'sending', trouble: null }]);
-        send(id, file);
-      }
-    },
-    again(id: string): void {
-      const one = running.current.get(id);
-      if (!one) return;
-      patch(id, { state: 'sending', share: 0, trouble: null });
-      send(id, one.file);
-    },
-    drop(id: string): void {
-      running.current.get(id)?.upload.cancel();
-      running.current.delete(id);
-      setFiles((all) => all.filter((one) => one.id !== id));
-    },
-    clear(): void {
-      running.current.clear();
-      setFiles([]);
-    },
+  const add = (list: readonly File[]): void => {
+    for (const file of list) {
+      const id = crypto.randomUUID();
+      setFiles((all) => [...all, { id, name: file.name, share: 0, state: 'sending', trouble: null }]);
+      send(id, file);
+    }
   };
+  const again = (id: string): void => {
+    const one = running.current.get(id);
+    if (!one) return;
+    patch(id, { state: 'sending', share: 0, trouble: null });
+    send(id, one.file);
+  };
+  const drop = (id: string): void => {
+    running.current.get(id)?.upload.cancel();
+    running.current.delete(id);
+    setFiles((all) => all.filter((one) => one.id !== id));
+  };
+  const clear = (): void => {
+    running.current.clear();
+    setFiles([]);
+  };
+  return { files, add, again, drop, clear };
 }

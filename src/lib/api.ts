@@ -51,7 +51,7 @@ export function addressOf<T extends AnyRoute>(route: T, input: RouteInput<T>): s
   const path = route.path.replace(/:(\w+)/g, (_whole, name: string) => encodeURIComponent(params[name] ?? ''));
   const search = new URLSearchParams();
   for (const [name, value] of Object.entries(query))
-    if (value !== undefined && value !== null) search.set(name, String(value as string | number | boolean));
+    if (value !== undefined && value !== null) search.set(name, String(value));
   return `${API_BASE}${path}${search.size > 0 ? `?${search.toString()}` : ''}`;
 }
 

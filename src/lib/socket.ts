@@ -64,7 +64,7 @@ const subscribe = <T>(listeners: Set<T>, listener: T): (() => void) => {
 
 export function onRealtime<N extends RealtimeName>(name: N, listener: Listener<RealtimeEvents[N]>): () => void {
   const listeners = (events.get(name) ?? new Set()) as unknown as Set<Listener<RealtimeEvents[N]>>;
-  events.set(name, listeners as unknown as Set<Listener<never>>);
+  events.set(name, listeners);
   return subscribe(listeners, listener);
 }
 

@@ -17,12 +17,16 @@ export async function removeFile(ctx: RequestContext, { params }: ParsedInput<ty
   const file = await loadFile(ctx.manager, commissionId, fileId);
   if (!file) throw new NotFound();
   const audience = await authorizeFilePlace(ctx.manager, ctx.ability, file, 'read', file.purpose);
-  if (file.addedByAccountId !== ctx.actor.accountId) throw new NotPermitted('Only the person who added a file can take it back.');
+  if (file.addedByAccountId !== ctx.actor.accountId)
+    throw new NotPermitted('Only the person who added a file can take it back.');
   await inTransaction(ctx, async (uow) => {
-    const carried = file.place === 'thread' && (await uow.manager.existsBy(Message, { threadId: file.placeId, fileIds: ArrayContains([fileId]) }));
+    const carried =
+      file.place === 'thread' &&
+      (await uow.manager.existsBy(Message, { threadId: file.placeId, fileIds: ArrayContains([fileId]) }));
     if (carried) throw new NotInThisState('A message carries this file. What was sent stays as it was sent.');
     const report = file.place === 'report' ? await uow.manager.findOneBy(FitReport, { id: file.placeId }) : null;
-    if (report && report.state !== 'raised') throw new NotInThisState('The report has been answered on the strength of its pictures. They stay.');
+    if (report && report.state !== 'raised')
+      throw new NotInThisState('The report has been answered on the strength of its pictures. They stay.');
     await uow.manager.update(Commission, { id: commissionId, coverFileId: fileId }, { coverFileId: null });
     await uow.manager.delete(StoredFile, { id: fileId });
     uow.announce('files.changed', { commissionId, place: file.place, placeId: file.placeId }, audience);

@@ -2,7 +2,10 @@ import { makeRenditions } from '../../integrations/images/renditions.ts';
 import { newObjectKey, type ObjectStorage } from '../../integrations/storage/object-storage.ts';
 import type { StoredFile, StoredRendition } from '../../entities/stored-file.ts';
 
-export type StoredBytes = Pick<StoredFile, 'mediaType' | 'byteSize' | 'sha256' | 'storageKey' | 'renditions' | 'width' | 'height'>;
+export type StoredBytes = Pick<
+  StoredFile,
+  'mediaType' | 'byteSize' | 'sha256' | 'storageKey' | 'renditions' | 'width' | 'height'
+>;
 
 /**
  * Stores a photograph in its sizes: upright, and without anything the camera wrote into it. The original is not kept,
@@ -25,7 +28,12 @@ export async function storePhotograph(storage: ObjectStorage, filePath: string):
   }
   const { full } = made;
   return {
-    mediaType: full.mediaType, byteSize: String(full.byteSize), sha256: full.sha256, storageKey: renditions['full']?.key ?? '',
-    renditions, width: full.width, height: full.height,
+    mediaType: full.mediaType,
+    byteSize: String(full.byteSize),
+    sha256: full.sha256,
+    storageKey: renditions['full']?.key ?? '',
+    renditions,
+    width: full.width,
+    height: full.height,
   };
 }

@@ -20,7 +20,11 @@ import { loadFile, presentFile } from '../../queries/files/load-files.ts';
 import { storePhotograph, type StoredBytes } from './store-photograph.ts';
 
 /** What each place takes; a purpose elsewhere is a mistake of the sender. */
-const PURPOSES = { thread: ['message'], report: ['before', 'after'], commission: ['cover', 'brief', 'condition'] } as const satisfies Record<string, readonly string[]>;
+const PURPOSES = {
+  thread: ['message'],
+  report: ['before', 'after'],
+  commission: ['cover', 'brief', 'condition'],
+} as const satisfies Record<string, readonly string[]>;
 
 async function checksumOf(filePath: string): Promise<string> {
   const hash = createHash('sha256');
@@ -32,7 +36,11 @@ async function checksumOf(filePath: string): Promise<string> {
 async function store(storage: ObjectStorage, file: ReceivedFile): Promise<StoredBytes> {
   const { mediaType, kind } = await detectMediaType(file.path);
   if (kind === 'image') {
-    if (file.byteSize > FILE_LIMITS.imageBytes) throw new FileRefusedError('image-too-large', `A picture may have up to ${FILE_LIMITS.imageBytes / 1024 / 1024} MB.`);
+    if (file.byteSize > FILE_LIMITS.imageBytes)
+      throw new FileRefusedError(
+        'image-too-large',
+        `A picture may have up to ${FILE_LIMITS.imageBytes / 1024 / 1024} MB.`,
+      );
     return storePhotograph(storage, file.path);
   }
   const isVideo = mediaType === 'video/mp4' || mediaType === 'video/quicktime';
@@ -44,10 +52,13 @@ async function store(storage: ObjectStorage, file: ReceivedFile): Promise<Stored
   return { mediaType, byteSize: String(byteSize), sha256, storageKey, renditions: null, width: null, height: null };
 }
 
-const keysOfStored = (stored: StoredBytes): string[] => (stored.renditions ? Object.values(stored.renditions).map((one) => one.key) : [stored.storageKey]);
+const keysOfStored = (stored: StoredBytes): string[] =>
+  stored.renditions ? Object.values(stored.renditions).map((one) => one.key) : [stored.storageKey];
 
 const asProblem = (thrown: unknown): unknown =>
-  thrown instanceof FileRefusedError ? new AppError(thrown.code === 'too-large' ? 'too-large' : 'file-refused', thrown.words) : thrown;
+  thrown instanceof FileRefusedError
+    ? new AppError(thrown.code === 'too-large' ? 'too-large' : 'file-refused', thrown.words)
+    : thrown;
 
 /** Takes one file into a place. The same id again gives what is stored; a file whose row cannot be written leaves nothing behind. */
 export async function uploadFile(ctx: RequestContext): Promise<StoredFileView> {
@@ -58,7 +69,10 @@ export async function uploadFile(ctx: RequestContext): Promise<StoredFileView> {
   authorizeCommissionSight(ctx.ability, commissionId);
   const { UPLOADS_DIR, MAX_UPLOAD_BYTES } = ctx.services.env;
   try {
-    const receive = createUploadReceiver({ uploadsDir: UPLOADS_DIR, maxFileBytes: Math.min(MAX_UPLOAD_BYTES, FILE_LIMITS.fileBytes) });
+    const receive = createUploadReceiver({
+      uploadsDir: UPLOADS_DIR,
+      maxFileBytes: Math.min(MAX_UPLOAD_BYTES, FILE_LIMITS.fileBytes),
+    });
     const { fields, file } = await receive(ctx.req, ctx.res);
     try {
       return await keep(ctx, commissionId, fields, file);
@@ -70,22 +84,42 @@ export async function uploadFile(ctx: RequestContext): Promise<StoredFileView> {
   }
 }
 
-async function keep(ctx: RequestContext, commissionId: string, fields: Readonly<Record<string, unknown>>, file: ReceivedFile): Promise<StoredFileView> {
+async function keep(
+  ctx: RequestContext,
+  commissionId: string,
+  fields: Readonly<Record<string, unknown>>,
+  file: ReceivedFile,
+): Promise<StoredFileView> {
   const parsed = contract.body.safeParse(fields);
   if (!parsed.success) throw new InputInvalid(pointersOf('body', parsed.error.issues));
   const { id, place, placeId, purpose, caption } = parsed.data;
   const audience = await authorizeFilePlace(ctx.manager, ctx.ability, { commissionId, place, placeId }, 'picture');
-  if (!(PURPOSES[place] as readonly string[]).includes(purpose)) throw new InputInvalid([{ pointer: '/body/purpose', message: `Files here are for: ${PURPOSES[place].join(', ')}` }]);
+  if (!(PURPOSES[place] as readonly string[]).includes(purpose))
+    throw new InputInvalid([
+      { pointer: '/body/purpose', message: `Files here are for: ${PURPOSES[place].join(', ')}` },
+    ]);
   const earlier = await loadFile(ctx.manager, commissionId, id);
   if (earlier) {
-    if (earlier.addedByAccountId !== ctx.actor.accountId || earlier.placeId !== placeId) throw new AppError('already-there', 'A file with this id is somewhere else.');
+    if (earlier.addedByAccountId !== ctx.actor.accountId || earlier.placeId !== placeId)
+      throw new AppError('already-there', 'A file with this id is somewhere else.');
     return presentFile(earlier);
   }
   const { storage } = ctx.services;
   const stored = await store(storage, file);
   try {
     await inTransaction(ctx, async (uow) => {
-      await uow.manager.insert(StoredFile, { id, commissionId, place, placeId, purpose, caption, name: file.name, addedByAccountId: ctx.actor.accountId, createdAt: ctx.now, ...stored });
+      await uow.manager.insert(StoredFile, {
+        id,
+        commissionId,
+        place,
+        placeId,
+        purpose,
+        caption,
+        name: file.name,
+        addedByAccountId: ctx.actor.accountId,
+        createdAt: ctx.now,
+        ...stored,
+      });
       uow.announce('files.changed', { commissionId, place, placeId }, audience);
       if (place === 'report') {
         const report = await uow.manager.findOneByOrFail(FitReport, { id: placeId });

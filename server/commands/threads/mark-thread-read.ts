@@ -4,7 +4,10 @@ import type { RequestContext } from '../../http/context.ts';
 import { loadThread } from '../../queries/threads/load-thread.ts';
 
 /** Moves a person's mark forward, never back and never past the last message. */
-export async function markThreadRead(ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<void> {
+export async function markThreadRead(
+  ctx: RequestContext,
+  { params, body }: ParsedInput<typeof contract>,
+): Promise<void> {
   const thread = await loadThread(ctx.manager, ctx.ability, params.commissionId, params.threadId);
   await ctx.manager.query(
     `INSERT INTO "thread_mark" ("thread_id", "account_id", "read_sequence") VALUES ($1, $2, $3)

@@ -15,7 +15,12 @@ import { authorizeCreate } from '../../policies/authorize.ts';
 import { requireParties } from '../../queries/parties/load-party.ts';
 
 /** A thread is about something of this commission that its opener may see. */
-async function mayReadSubject(ctx: RequestContext, commissionId: string, subject: ThreadSubject, id: string): Promise<boolean> {
+async function mayReadSubject(
+  ctx: RequestContext,
+  commissionId: string,
+  subject: ThreadSubject,
+  id: string,
+): Promise<boolean> {
   const where = { id, commissionId };
   switch (subject) {
     case 'commission':
@@ -49,11 +54,32 @@ export const openThread = (ctx: RequestContext, { params, body }: ParsedInput<ty
       throw new NotPermitted('As the client you write to everyone, or to parties you name.');
     if (!(await mayReadSubject(ctx, commissionId, body.subject, body.subjectId)))
       throw new InputInvalid([{ pointer: '/body/subjectId', message: 'There is nothing here for you to write about' }]);
-    await requireParties(uow.manager, commissionId, body.partyIds.map((id, index) => [`/body/partyIds/${index}`, id]));
-    const partyIds = body.audience === 'named' ? [...new Set([opener.partyId, ...body.partyIds])] : body.audience === 'own-shop' ? [opener.partyId] : [];
-    const row = await uow.manager.save(
-      uow.manager.create(Thread, { commissionId, subject: body.subject, subjectId: body.subjectId, title: body.title, audience: body.audience, partyIds, openedByPartyId: opener.partyId }),
+    await requireParties(
+      uow.manager,
+      commissionId,
+      body.partyIds.map((id, index) => [`/body/partyIds/${index}`, id]),
     );
-    uow.announce('thread.opened', { commissionId, threadId: row.id, subject: row.subject, subjectId: row.subjectId }, { to: 'thread', threadId: row.id });
+    const partyIds =
+      body.audience === 'named'
+        ? [...new Set([opener.partyId, ...body.partyIds])]
+        : body.audience === 'own-shop'
+          ? [opener.partyId]
+          : [];
+    const row = await uow.manager.save(
+      uow.manager.create(Thread, {
+        commissionId,
+        subject: body.subject,
+        subjectId: body.subjectId,
+        title: body.title,
+        audience: body.audience,
+        partyIds,
+        openedByPartyId: opener.partyId,
+      }),
+    );
+    uow.announce(
+      'thread.opened',
+      { commissionId, threadId: row.id, subject: row.subject, subjectId: row.subjectId },
+      { to: 'thread', threadId: row.id },
+    );
     return row.id;
   });

@@ -35,7 +35,14 @@ async function guardMentions(ctx: RequestContext, thread: Thread, accountIds: re
   if (accountIds.length === 0) return;
   const readers = await readersOf(ctx.manager, thread.id);
   const errors = accountIds.flatMap((id, index) =>
-    readers.has(id) ? [] : [{ pointer: `/body/mentionedAccountIds/${index}`, message: 'This person does not read the thread, so naming them would reach nobody' }],
+    readers.has(id)
+      ? []
+      : [
+          {
+            pointer: `/body/mentionedAccountIds/${index}`,
+            message: 'This person does not read the thread, so naming them would reach nobody',
+          },
+        ],
   );
   if (errors.length > 0) throw new InputInvalid(errors);
 }
@@ -43,8 +50,16 @@ async function guardMentions(ctx: RequestContext, thread: Thread, accountIds: re
 /** A message takes along files that its own writer put into this thread. */
 async function guardFiles(ctx: RequestContext, thread: Thread, fileIds: readonly string[]): Promise<void> {
   for (const [index, id] of fileIds.entries()) {
-    const ours = await ctx.manager.countBy(StoredFile, { id, place: 'thread', placeId: thread.id, addedByAccountId: ctx.actor.accountId });
-    if (ours === 0) throw new InputInvalid([{ pointer: `/body/fileIds/${index}`, message: 'This file was not added to this thread by you' }]);
+    const ours = await ctx.manager.countBy(StoredFile, {
+      id,
+      place: 'thread',
+      placeId: thread.id,
+      addedByAccountId: ctx.actor.accountId,
+    });
+    if (ours === 0)
+      throw new InputInvalid([
+        { pointer: `/body/fileIds/${index}`, message: 'This file was not added to this thread by you' },
+      ]);
   }
 }
 
@@ -54,7 +69,10 @@ const isRepeat = (thrown: unknown): boolean => {
 };
 
 /** Stores a message under the id its writer made. The same id again gives the stored message, whatever is resent. */
-export async function postMessage(ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<MessageView> {
+export async function postMessage(
+  ctx: RequestContext,
+  { params, body }: ParsedInput<typeof contract>,
+): Promise<MessageView> {
   const { commissionId, threadId } = params;
   const thread = await ctx.manager.findOneBy(Thread, { id: threadId, commissionId });
   authorize(ctx.ability, 'post', 'Thread', thread);
@@ -85,7 +103,14 @@ export async function postMessage(ctx: RequestContext, { params, body }: ParsedI
   }
   ctx.wakeRelay();
   return {
-    id: body.id, sequence, authorAccountId: accountId, authorName: ctx.person.displayName, authorPartyId: partyId, body: body.body,
-    mentionedAccountIds: body.mentionedAccountIds, files: [], at: ctx.now.toISOString(),
+    id: body.id,
+    sequence,
+    authorAccountId: accountId,
+    authorName: ctx.person.displayName,
+    authorPartyId: partyId,
+    body: body.body,
+    mentionedAccountIds: body.mentionedAccountIds,
+    files: [],
+    at: ctx.now.toISOString(),
   };
 }

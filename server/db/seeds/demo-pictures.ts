@@ -33,7 +33,10 @@ export class DemoPictures {
     const picture = left.find((one) => one.purpose === wanted);
     if (!picture) return null;
     this.#taken.add(picture.fileName);
-    const stored = await storePhotograph(this.#storage, fileURLToPath(new URL(`./pictures/${picture.fileName}`, import.meta.url)));
+    const stored = await storePhotograph(
+      this.#storage,
+      fileURLToPath(new URL(`./pictures/${picture.fileName}`, import.meta.url)),
+    );
     const id = randomUUID();
     await manager.insert(StoredFile, { id, ...place, name: picture.fileName, caption: picture.title, ...stored });
     return id;

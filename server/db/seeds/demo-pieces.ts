@@ -156,7 +156,7 @@ const saltLantern: DemoPiece = {
     ['marrow', ['finisher']],
     ['colm', ['maker']],
   ],
-  told: [24, 31],
+  told: [20, 27],
   parts: [
     { key: 'hilt', name: 'Hilt', kind: 'hilt', holder: 'tinder', since: -4 },
     { key: 'pommel', name: 'Pommel', kind: 'pommel', holder: 'tinder', since: -4 },

@@ -1,7 +1,8 @@
 import type { QueryConfig } from 'pg';
 import { memberKeysOf } from '../../../shared/abilities/actor.ts';
 import { showCode } from '../../../shared/engines/codes/crockford.ts';
-import { listCommissions as contract, type CommissionRow } from '../../../shared/contracts/commissions.ts';
+import type { listCommissions as contract } from '../../../shared/contracts/commissions.ts';
+import { type CommissionRow } from '../../../shared/contracts/commissions.ts';
 import type { ParsedInput } from '../../../shared/contracts/route.ts';
 import { OPEN_REPORT_STATES, type CommissionState, type PartyRole } from '../../../shared/contracts/vocabulary.ts';
 import { poolOf } from '../../db/data-source.ts';

@@ -29,16 +29,43 @@ const filesSql = (where: string): string => `
     f."added_by_account_id" AS "addedByAccountId", f."created_at" AS "createdAt", a."display_name" AS "addedBy"
   FROM "stored_file" f JOIN "account" a ON a."id" = f."added_by_account_id" WHERE ${where} ORDER BY f."created_at", f."id"`;
 
-export const loadFilesAt = (manager: EntityManager, commissionId: string, place: FilePlace, placeId: string): Promise<FileRecord[]> =>
-  manager.query<FileRecord[]>(filesSql('f."commission_id" = $1 AND f."place" = $2 AND f."place_id" = $3'), [commissionId, place, placeId]);
+export const loadFilesAt = (
+  manager: EntityManager,
+  commissionId: string,
+  place: FilePlace,
+  placeId: string,
+): Promise<FileRecord[]> =>
+  manager.query<FileRecord[]>(filesSql('f."commission_id" = $1 AND f."place" = $2 AND f."place_id" = $3'), [
+    commissionId,
+    place,
+    placeId,
+  ]);
 
-export async function loadFile(manager: EntityManager, commissionId: string, fileId: string): Promise<FileRecord | null> {
-  const [row] = await manager.query<FileRecord[]>(filesSql('f."commission_id" = $1 AND f."id" = $2'), [commissionId, fileId]);
+export async function loadFile(
+  manager: EntityManager,
+  commissionId: string,
+  fileId: string,
+): Promise<FileRecord | null> {
+  const [row] = await manager.query<FileRecord[]>(filesSql('f."commission_id" = $1 AND f."id" = $2'), [
+    commissionId,
+    fileId,
+  ]);
   return row ?? null;
 }
 
 /** What a reader sees of a file; where its bytes lie is nobody's business. */
 export const presentFile = (row: FileRecord): StoredFileView => ({
-  id: row.id, name: row.name, mediaType: row.mediaType, byteSize: Number(row.byteSize), sha256: row.sha256, width: row.width, height: row.height,
-  place: row.place, placeId: row.placeId, purpose: row.purpose, caption: row.caption, addedBy: row.addedBy, addedAt: row.createdAt.toISOString(),
+  id: row.id,
+  name: row.name,
+  mediaType: row.mediaType,
+  byteSize: Number(row.byteSize),
+  sha256: row.sha256,
+  width: row.width,
+  height: row.height,
+  place: row.place,
+  placeId: row.placeId,
+  purpose: row.purpose,
+  caption: row.caption,
+  addedBy: row.addedBy,
+  addedAt: row.createdAt.toISOString(),
 });

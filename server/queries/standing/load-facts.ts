@@ -5,7 +5,7 @@ import type { CommissionFacts } from '../../../shared/engines/standing/commissio
 import { showCode } from '../../../shared/engines/codes/crockford.ts';
 import { planOf, type Plan, type PlanInput } from '../../../shared/engines/schedule/plan.ts';
 import { isWorkingDay, type IsoDay } from '../../../shared/units/calendar-day.ts';
-import { Commission } from '../../entities/commission.ts';
+import type { Commission } from '../../entities/commission.ts';
 import { loadAllHandoffs, type HandoffRecord } from '../handoffs/load-handoffs.ts';
 import { loadAllLegs, type LegRecord } from '../legs/load-legs.ts';
 
@@ -64,7 +64,7 @@ export async function loadCommissionFacts(
     loadAllHandoffs(manager, id),
     manager.query<PartyRow[]>(PARTIES_SQL, [id]),
     manager.query<CommissionFacts['parts']>(
-      `SELECT "id", "name", "holder_party_id" AS "holderPartyId", "holder_since"::text AS "holderSince" FROM "part" WHERE "commission_id" = $1 ORDER BY "position", "id"`,
+      `SELECT "id", "name", "position", "holder_party_id" AS "holderPartyId", "holder_since"::text AS "holderSince" FROM "part" WHERE "commission_id" = $1 ORDER BY "position", "id"`,
       [id],
     ),
     manager.query<ReportRow[]>(REPORTS_SQL, [id]),

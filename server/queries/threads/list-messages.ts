@@ -26,7 +26,10 @@ const COLUMNS = `m."id", m."sequence", m."author_account_id", a."display_name" A
 const FROM = '"message" m JOIN "account" a ON a."id" = m."author_account_id"';
 
 /** One page by sequence, always ascending; also what the bench puts behind its bare handler. */
-export function messagesStatement(threadId: string, query: { before?: number | undefined; after?: number | undefined; limit: number }): QueryConfig {
+export function messagesStatement(
+  threadId: string,
+  query: { before?: number | undefined; after?: number | undefined; limit: number },
+): QueryConfig {
   if (query.after !== undefined)
     return {
       name: 'messages-after',
@@ -52,7 +55,10 @@ export const presentMessage = (row: MessageRow): MessageView => ({
   at: row.created_at.toISOString(),
 });
 
-export async function listMessages(ctx: RequestContext, { params, query }: ParsedInput<typeof contract>): Promise<RouteOutput<typeof contract>> {
+export async function listMessages(
+  ctx: RequestContext,
+  { params, query }: ParsedInput<typeof contract>,
+): Promise<RouteOutput<typeof contract>> {
   const thread = await loadThread(ctx.manager, ctx.ability, params.commissionId, params.threadId);
   const { rows } = await poolOf(ctx.db).query<MessageRow>(messagesStatement(thread.id, query));
   // The row of the thread was read first: a message stored in between may be in the page already.
@@ -61,7 +67,12 @@ export async function listMessages(ctx: RequestContext, { params, query }: Parse
 }
 
 /** One message by its writer's id. */
-export async function loadMessage(ctx: RequestContext, threadId: string, authorAccountId: string, id: string): Promise<MessageView | null> {
+export async function loadMessage(
+  ctx: RequestContext,
+  threadId: string,
+  authorAccountId: string,
+  id: string,
+): Promise<MessageView | null> {
   const [row] = await ctx.manager.query<MessageRow[]>(
     `SELECT ${COLUMNS} FROM ${FROM} WHERE m."thread_id" = $1 AND m."author_account_id" = $2 AND m."id" = $3`,
     [threadId, authorAccountId, id],

@@ -4,7 +4,12 @@ import { Thread } from '../../entities/thread.ts';
 import { authorize } from '../../policies/authorize.ts';
 
 /** The thread, when the reader may read it. */
-export async function loadThread(manager: EntityManager, ability: AppAbility, commissionId: string, threadId: string): Promise<Thread> {
+export async function loadThread(
+  manager: EntityManager,
+  ability: AppAbility,
+  commissionId: string,
+  threadId: string,
+): Promise<Thread> {
   const row = await manager.findOneBy(Thread, { id: threadId, commissionId });
   authorize(ability, 'read', 'Thread', row);
   return row;

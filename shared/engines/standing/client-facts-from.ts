@@ -72,14 +72,12 @@ export function clientFactsFrom(all: CommissionFacts): ClientFacts {
     pieceTitle: all.title,
     code: all.code,
     clientName: clients[0]?.name ?? null,
-    parts: [...all.parts]
-      .sort(by((part) => part.id))
-      .map((part) => ({
-        id: part.id,
-        name: part.name,
-        holderName: nameOf(part.holderPartyId),
-        sinceDay: part.holderSince,
-      })),
+    parts: [...all.parts].sort(by((part) => String(part.position).padStart(6, '0') + part.id)).map((part) => ({
+      id: part.id,
+      name: part.name,
+      holderName: nameOf(part.holderPartyId),
+      sinceDay: part.holderSince,
+    })),
     legs: all.legs
       .filter((leg) => leg.state !== 'dropped')
       .sort(by((leg) => (leg.startedOn ?? leg.likelyStartOn ?? leg.plannedStartOn ?? '9999') + leg.id))

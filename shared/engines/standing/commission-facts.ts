@@ -12,7 +12,7 @@ export interface CommissionFacts {
   told: { fromDay: IsoDay; toDay: IsoDay } | null;
   expected: { fromDay: IsoDay; toDay: IsoDay } | null;
   parties: { id: string; name: string; craft: string; isClient: boolean }[];
-  parts: { id: string; name: string; holderPartyId: string; holderSince: IsoDay }[];
+  parts: { id: string; name: string; position: number; holderPartyId: string; holderSince: IsoDay }[];
   legs: {
     id: string;
     partyId: string;

@@ -12,7 +12,7 @@ export interface ButtonProps extends ComponentProps<'button'> {
 
 /** A button that says its act. It never submits a form unless `type="submit"` is given. */
 export function Button({
-  variant = 'outline',
+  variant = 'primary',
   busy = false,
   busyLabel,
   type = 'button',

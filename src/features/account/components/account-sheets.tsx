@@ -20,11 +20,11 @@ import { keys } from '../../../lib/query-keys.ts';
 export function HowYouRead({ me }: { me: AccountView }) {
   const form = useContractForm(updateMe, {
     name: 'me',
-    initial: { displayName: me.displayName, preferredUnit: me.preferredUnit as string, timeZone: me.timeZone },
+    initial: { displayName: me.displayName, preferredUnit: me.preferredUnit, timeZone: me.timeZone },
     toInput: (values) => ({
       body: {
         displayName: values.displayName,
-        preferredUnit: values.preferredUnit as LengthUnit,
+        preferredUnit: values.preferredUnit,
         timeZone: values.timeZone,
       },
     }),

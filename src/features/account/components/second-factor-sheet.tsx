@@ -1,4 +1,4 @@
-import { useEffect, useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import {
   beginSecondFactor,
   confirmSecondFactor,
@@ -16,21 +16,21 @@ import { keys } from '../../../lib/query-keys.ts';
 
 /** The QR code as a picture of its own: the page's policy allows no markup from a string. */
 function QrCode({ svg }: { svg: string }) {
-  const [address, setAddress] = useState<string | null>(null);
+  const picture = useRef<HTMLImageElement>(null);
   useEffect(() => {
-    const made = URL.createObjectURL(new Blob([svg], { type: 'image/svg+xml' }));
-    setAddress(made);
-    return () => URL.revokeObjectURL(made);
+    const address = URL.createObjectURL(new Blob([svg], { type: 'image/svg+xml' }));
+    if (picture.current) picture.current.src = address;
+    return () => URL.revokeObjectURL(address);
   }, [svg]);
-  return address ? (
+  return (
     <img
-      src={address}
+      ref={picture}
       alt="QR code for your authenticator; the secret is beside it in letters"
       width={200}
       height={200}
       className="bg-vellum"
     />
-  ) : null;
+  );
 }
 
 function SetUp({ onConfirmed }: { onConfirmed: (codes: readonly string[]) => void }) {

@@ -100,7 +100,7 @@ export function NewCommissionForm({
   const [also, setAlso] = useState<readonly ('maker' | 'finisher' | 'installer')[]>([]);
   const form = useContractForm(createCommission, {
     name: 'new-commission',
-    initial: { title: '', brief: '', dateWanted: '', budget: '', currency: 'EUR' } as BriefValues,
+    initial: { title: '', brief: '', dateWanted: '', budget: '', currency: 'EUR' },
     toInput: (values) => ({ body: { leadShopId, alsoRoles: [...also], ...briefBody(values) } }),
     stale: () => [keys.commissions.lists(), keys.bench()],
     onDone: (made) => onMade(made.id),
@@ -157,10 +157,10 @@ export function EditCommissionForm({ commission }: { commission: CommissionView 
       budget: toMajor(commission.budgetMinor, currency),
       currency,
       state: commission.state,
-    } as BriefValues & { state: string },
+    },
     toInput: (values) => ({
       params: { commissionId: commission.id },
-      body: { revision, ...briefBody(values), state: values.state as CommissionState },
+      body: { revision, ...briefBody(values), state: values.state },
     }),
     stale: () => [keys.commission(commission.id), keys.commissions.lists()],
     onDone: (saved) => setRevision(saved.revision),
@@ -247,7 +247,7 @@ export function EditCommissionForm({ commission }: { commission: CommissionView 
             setRevision(theirs.revision);
             form.act.run({
               params: { commissionId: commission.id },
-              body: { revision: theirs.revision, ...briefBody(values), state: values.state as CommissionState },
+              body: { revision: theirs.revision, ...briefBody(values), state: values.state },
             });
           }}
         />

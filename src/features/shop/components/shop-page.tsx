@@ -29,11 +29,11 @@ function ShopForm({ shop }: { shop: ShopView }) {
       craft: shop.craft,
       country: shop.country,
       timeZone: shop.timeZone,
-      tint: shop.tint as string,
+      tint: shop.tint,
     },
     toInput: (values) => ({
       params: { shopId: shop.id },
-      body: { revision, ...values, tint: values.tint as ShopTint },
+      body: { revision, ...values, tint: values.tint },
     }),
     stale: () => [keys.shops.detail(shop.id), keys.me()],
     onDone: (saved) => setRevision(saved.revision),
@@ -101,7 +101,7 @@ function ShopForm({ shop }: { shop: ShopView }) {
             setRevision(theirs.revision);
             form.act.run({
               params: { shopId: shop.id },
-              body: { revision: theirs.revision, ...values, tint: values.tint as ShopTint },
+              body: { revision: theirs.revision, ...values, tint: values.tint },
             });
           }}
         />
