@@ -9,8 +9,10 @@ import {
   withdrawInvitation,
 } from '../../shared/contracts/commissions.ts';
 import type { RouteInput } from '../../shared/contracts/route.ts';
-import { createShop, inviteShopMember } from '../../shared/contracts/shops.ts';
+import { createShop, inviteShopMember, updateShop } from '../../shared/contracts/shops.ts';
+import { refreshCommissionNames } from '../../server/commands/commissions/refresh-members.ts';
 import { Commission } from '../../server/entities/commission.ts';
+import { Party } from '../../server/entities/party.ts';
 import { makeAccount, PASSWORD, signedInAs } from '../factories/account.ts';
 import { makeMember, makeShop, type MadeShop } from '../factories/shop.ts';
 import { letterTo, tokenIn } from '../support/letters.ts';
@@ -179,6 +181,26 @@ describe('an invitation as work', () => {
     );
     const { memberKeys } = await namesOf(opened.commissionId);
     expect(memberKeys).toEqual([opened.leadShop.id, ...made.map(({ shop }) => shop.id)].sort());
+  });
+
+  it('is kept when the lead’s shop is renamed at the same moment', async () => {
+    const { commissionId, lead, leadShop } = await openCommission();
+    const joining = await makeShop(app);
+    const runner = app.services.db.createQueryRunner();
+    await runner.startTransaction();
+    await runner.manager.insert(Party, { commissionId, shopId: joining.id, roles: ['maker'] });
+    await refreshCommissionNames(runner.manager, commissionId);
+    const renamed = lead.call(updateShop, { params: { shopId: leadShop.id }, body: { revision: 1, name: 'Renamed' } });
+    const waiting = `SELECT 1 FROM pg_stat_activity WHERE datname = current_database() AND wait_event_type = 'Lock'`;
+    await expect.poll(() => app.services.db.query<object[]>(waiting), { timeout: 5000 }).toHaveLength(1);
+    await runner.commitTransaction();
+    await runner.release();
+    await renamed;
+    expect(await namesOf(commissionId)).toEqual({
+      memberKeys: [leadShop.id, joining.id].sort(),
+      leadName: 'Renamed',
+      clientName: null,
+    });
   });
 });
 

@@ -5,6 +5,7 @@ import { AppError, InputInvalid } from '../../errors.ts';
 import type { OpenContext, RequestContext } from '../../http/context.ts';
 import { loadSignInFacts } from '../../queries/accounts/load-account.ts';
 import { findReset } from '../../queries/accounts/find-reset.ts';
+import { addressKey } from '../../security/address-key.ts';
 import { weaknessOf } from '../../security/common-passwords.ts';
 import { hashPassword, verifyPassword } from '../../security/passwords.ts';
 import { hashToken, newLinkToken } from '../../security/tokens.ts';
@@ -52,7 +53,7 @@ export async function askPasswordReset(
   ctx: OpenContext,
   { body }: ParsedInput<typeof contracts.askPasswordReset>,
 ): Promise<void> {
-  await ctx.services.limits.take('reset-address', ctx.req.ip ?? 'unknown');
+  await ctx.services.limits.take('reset-address', addressKey(ctx.req.ip));
   await ctx.services.limits.take('reset-email', body.email);
   const { token, tokenHash } = newLinkToken();
   await inTransaction(ctx, async (uow) => {
@@ -74,7 +75,7 @@ export async function completePasswordReset(
   ctx: OpenContext,
   { body }: ParsedInput<typeof contracts.completePasswordReset>,
 ): Promise<void> {
-  await ctx.services.limits.take('link', ctx.req.ip ?? 'unknown');
+  await ctx.services.limits.take('link', addressKey(ctx.req.ip));
   const tokenHash = hashToken(body.token);
   const person = await findReset(ctx.manager, tokenHash, ctx.now);
   if (!person) throw linkExpired();

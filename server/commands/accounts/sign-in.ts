@@ -3,6 +3,7 @@ import type { ParsedInput, RouteOutput } from '../../../shared/contracts/route.t
 import { AppError } from '../../errors.ts';
 import type { OpenContext } from '../../http/context.ts';
 import { loadSignInFacts } from '../../queries/accounts/load-account.ts';
+import { addressKey } from '../../security/address-key.ts';
 import { verifyPassword } from '../../security/passwords.ts';
 import { takeSecondFactor } from './second-factor.ts';
 import { openPendingSession, openSession } from './sessions.ts';
@@ -14,7 +15,7 @@ const PENDING_MS = 10 * 60 * 1000;
 /** One answer and one duration, whether the account is there or not. */
 export async function signIn(ctx: OpenContext, { body }: ParsedInput<typeof contract>): Promise<SignedIn> {
   const { limits } = ctx.services;
-  const address = ctx.req.ip ?? 'unknown';
+  const address = addressKey(ctx.req.ip);
   const pair = `${address}|${body.email}`;
   await limits.take('sign-in-address', address);
   await limits.take('sign-in-pair', pair);

@@ -4,6 +4,7 @@ import { inTransaction } from '../../db/unit-of-work.ts';
 import { Account } from '../../entities/account.ts';
 import type { OpenContext } from '../../http/context.ts';
 import { findInvitation } from '../../queries/invitations/find-invitation.ts';
+import { addressKey } from '../../security/address-key.ts';
 import { openSession } from '../accounts/sessions.ts';
 import { takerOf } from './taker-of.ts';
 import { joinCommission } from './join-commission.ts';
@@ -14,7 +15,7 @@ export async function acceptInvitation(
   ctx: OpenContext,
   { body }: ParsedInput<typeof contract>,
 ): Promise<RouteOutput<typeof contract>> {
-  await ctx.services.limits.take('link', ctx.req.ip ?? 'unknown');
+  await ctx.services.limits.take('link', addressKey(ctx.req.ip));
   const taker = await takerOf(ctx, await findInvitation(ctx.manager, body.token, ctx.now), body.newAccount);
   const { accountId, commissionId, shopId } = await inTransaction(ctx, async (uow) => {
     // Asked again under a lock, so that of two tries at once one gets it.

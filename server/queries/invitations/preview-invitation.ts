@@ -4,6 +4,7 @@ import { Account } from '../../entities/account.ts';
 import { Commission } from '../../entities/commission.ts';
 import { Shop } from '../../entities/shop.ts';
 import type { OpenContext } from '../../http/context.ts';
+import { addressKey } from '../../security/address-key.ts';
 import { loadAccountView } from '../accounts/load-account.ts';
 import { findInvitation, needsShop } from './find-invitation.ts';
 
@@ -11,7 +12,7 @@ export async function previewInvitation(
   ctx: OpenContext,
   { body }: ParsedInput<typeof contract>,
 ): Promise<RouteOutput<typeof contract>> {
-  await ctx.services.limits.take('link', ctx.req.ip ?? 'unknown');
+  await ctx.services.limits.take('link', addressKey(ctx.req.ip));
   const invitation = await findInvitation(ctx.manager, body.token, ctx.now);
   const inviter = await ctx.manager.findOneByOrFail(Account, { id: invitation.invitedByAccountId });
   const commission = invitation.commissionId
