@@ -10,6 +10,7 @@ import type { Services } from '../services.ts';
 import type { OpenContext, RequestContext } from './context.ts';
 import { claimKey, hashRequest, keepAnswer, readIdempotencyKey } from './idempotency.ts';
 import { parseInput } from './parse-input.ts';
+import { requestIdOf } from './request-id.ts';
 
 type Handler<C, T extends AnyRoute> = (ctx: C, input: ParsedInput<T>) => Promise<z.input<T['response']>>;
 
@@ -58,7 +59,7 @@ export class Api {
       manager: db.manager,
       uow: null,
       services: this.services,
-      requestId: String(req.id),
+      requestId: requestIdOf(req),
       now: clock(),
       sessionAccountId: req.session.accountId ?? null,
       req,

@@ -1,6 +1,6 @@
 import type { Server as HttpServer } from 'node:http';
 import type { RequestHandler } from 'express';
-import { Server, type Socket } from 'socket.io';
+import { Server, type DefaultEventsMap, type Socket } from 'socket.io';
 import {
   CLIENT_EVENTS,
   PRESENCE_EVENT,
@@ -20,21 +20,22 @@ interface SocketData {
   accountId: string;
   displayName: string;
 }
-type AppSocket = Socket<Record<string, never>, Record<string, never>, Record<string, never>, SocketData>;
+type AppServer = Server<DefaultEventsMap, DefaultEventsMap, DefaultEventsMap, SocketData>;
+type AppSocket = Socket<DefaultEventsMap, DefaultEventsMap, DefaultEventsMap, SocketData>;
 
 const threadRoom = (threadId: string): string => `thread:${threadId}`;
 const keyRoom = (key: string): string => `key:${key}`;
 
 /** The realtime side: rooms by account and shop, presence in threads, and events that the outbox sends. */
 export class Hub {
-  readonly io: Server;
+  readonly io: AppServer;
   readonly #services: Services;
   readonly #presence = new Presence();
 
   constructor(http: HttpServer, services: Services, session: RequestHandler) {
     this.#services = services;
     const { PUBLIC_ORIGIN } = services.env;
-    this.io = new Server(http, {
+    this.io = new Server<DefaultEventsMap, DefaultEventsMap, DefaultEventsMap, SocketData>(http, {
       serveClient: false,
       transports: ['websocket'],
       maxHttpBufferSize: 64 * 1024,
@@ -46,7 +47,7 @@ export class Hub {
     });
     this.io.engine.use(session);
     this.io.use((socket, next) => void this.#admit(socket, next));
-    this.io.on('connection', (socket) => this.#serve(socket as unknown as AppSocket));
+    this.io.on('connection', (socket) => this.#serve(socket));
   }
 
   /** Outbox handler: works out who hears an event now and sends it to them. */
@@ -134,7 +135,7 @@ export class Hub {
     const sockets = this.io.sockets.sockets.values();
     const concerned = [...sockets].filter((socket) => keys.some((key) => socket.rooms.has(keyRoom(key))));
     for (const socket of concerned) {
-      const { accountId } = socket.data as SocketData;
+      const { accountId } = socket.data;
       const rooms = await roomsOf(this.#services.db.manager, accountId);
       const allowed = new Set(rooms.map(keyRoom));
       for (const room of socket.rooms) if (room.startsWith('key:') && !allowed.has(room)) await socket.leave(room);

@@ -30,18 +30,20 @@ const write = (name: string, value: string | null): void => {
 export function useDraft(name: string, initial: string): [string, (value: string) => void, () => void] {
   const accountId = useQueryClient().getQueryData<AccountView>(keys.me())?.id ?? 'anyone';
   const place = `ferrule-draft:${accountId}:${name}`;
-  const [held, setHeld] = useState<{ place: string; value: string }>(() => ({ place, value: read(place) ?? initial }));
-  const value = held.place === place ? held.value : (read(place) ?? initial);
+  // Null while nothing was typed: the value then follows what it began from, also when that changes.
+  const [held, setHeld] = useState<{ place: string; typed: string | null }>(() => ({ place, typed: read(place) }));
+  const typed = held.place === place ? held.typed : read(place);
   const keep = useCallback(
     (next: string) => {
-      setHeld({ place, value: next });
-      write(place, next === '' || next === initial ? null : next);
+      const kept = next === initial ? null : next;
+      setHeld({ place, typed: kept });
+      write(place, kept);
     },
     [place, initial],
   );
   const forget = useCallback(() => {
-    setHeld({ place, value: initial });
+    setHeld({ place, typed: null });
     write(place, null);
-  }, [place, initial]);
-  return [value, keep, forget];
+  }, [place]);
+  return [typed ?? initial, keep, forget];
 }

@@ -41,7 +41,7 @@ export interface CallOptions {
 
 interface AnyInput {
   params?: Record<string, string>;
-  query?: Record<string, unknown>;
+  query?: Record<string, string | number | boolean | null | undefined>;
   body?: unknown;
 }
 

@@ -49,7 +49,10 @@ export function HowYouRead({ me }: { me: AccountView }) {
           />
         </Field>
         <Field label="Lengths in">
-          <Select value={values.preferredUnit} onChange={(event) => set('preferredUnit', event.target.value)}>
+          <Select
+            value={values.preferredUnit}
+            onChange={(event) => set('preferredUnit', event.target.value as LengthUnit)}
+          >
             <option value="mm">millimetres</option>
             <option value="inch">decimal inches</option>
             <option value="inch-fraction">fractions of an inch</option>

@@ -48,7 +48,7 @@ const briefBody = (values: BriefValues) => ({
 
 interface BriefFieldsProps {
   values: BriefValues;
-  set: (name: keyof BriefValues & string, value: string) => void;
+  set: <K extends 'title' | 'brief' | 'dateWanted' | 'budget' | 'currency'>(name: K, value: string) => void;
   errorAt: (pointer: string) => string | undefined;
 }
 
@@ -147,7 +147,6 @@ export function NewCommissionForm({
 
 export function EditCommissionForm({ commission }: { commission: CommissionView }) {
   const currency = commission.currency ?? 'EUR';
-  const [revision, setRevision] = useState(commission.revision);
   const form = useContractForm(updateCommission, {
     name: `commission-${commission.id}`,
     initial: {
@@ -157,13 +156,14 @@ export function EditCommissionForm({ commission }: { commission: CommissionView 
       budget: toMajor(commission.budgetMinor, currency),
       currency,
       state: commission.state,
+      // Part of what was typed: a draft knows the revision it began from, over a reload too.
+      revision: commission.revision.toString(),
     },
     toInput: (values) => ({
       params: { commissionId: commission.id },
-      body: { revision, ...briefBody(values), state: values.state },
+      body: { revision: Number(values.revision), ...briefBody(values), state: values.state },
     }),
     stale: () => [keys.commission(commission.id), keys.commissions.lists()],
-    onDone: (saved) => setRevision(saved.revision),
   });
   const theirs =
     form.act.problem?.code === 'stale-revision' ? (form.act.problem.problem.current as CommissionView) : null;
@@ -176,9 +176,9 @@ export function EditCommissionForm({ commission }: { commission: CommissionView 
         form.submit();
       }}
     >
-      <BriefFields values={values} set={set} errorAt={form.errorAt} />
+      <BriefFields values={values} set={(name, value) => form.patch({ [name]: value })} errorAt={form.errorAt} />
       <Field label="State">
-        <Select value={values.state} onChange={(event) => set('state', event.target.value)}>
+        <Select value={values.state} onChange={(event) => set('state', event.target.value as CommissionState)}>
           {COMMISSION_STATES.map((state) => (
             <option key={state} value={state}>
               {COMMISSION_STATE_WORDS[state]}
@@ -244,7 +244,7 @@ export function EditCommissionForm({ commission }: { commission: CommissionView 
             },
           ]}
           onSaveMine={() => {
-            setRevision(theirs.revision);
+            form.patch({ revision: theirs.revision.toString() });
             form.act.run({
               params: { commissionId: commission.id },
               body: { revision: theirs.revision, ...briefBody(values), state: values.state },

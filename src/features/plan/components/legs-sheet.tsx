@@ -1,5 +1,5 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { useState, type ReactNode } from 'react';
+import type { ReactNode } from 'react';
 import { updateLeg, type LegView } from '../../../../shared/contracts/parts-and-legs.ts';
 import { shortDay } from '../../../../shared/units/calendar-day.ts';
 import { ConflictSheet } from '../../../components/conflict-sheet.tsx';
@@ -22,7 +22,6 @@ const number = (text: string): number => Number(text.trim().replace(',', '.'));
 
 /** Estimates and the shop's own note of a leg, for those who may change them. */
 function EditLeg({ commissionId, leg, own }: { commissionId: string; leg: LegView; own: boolean }) {
-  const [revision, setRevision] = useState(leg.revision);
   const form = useContractForm(updateLeg, {
     name: `leg-${leg.id}`,
     initial: {
@@ -30,11 +29,12 @@ function EditLeg({ commissionId, leg, own }: { commissionId: string; leg: LegVie
       likely: String(leg.likelyDays ?? ''),
       bad: String(leg.badDays ?? ''),
       note: leg.privateNote ?? '',
+      revision: leg.revision.toString(),
     },
     toInput: (values) => ({
       params: { commissionId, legId: leg.id },
       body: {
-        revision,
+        revision: Number(values.revision),
         hopefulDays: number(values.hopeful),
         likelyDays: number(values.likely),
         badDays: number(values.bad),
@@ -42,7 +42,6 @@ function EditLeg({ commissionId, leg, own }: { commissionId: string; leg: LegVie
       },
     }),
     stale: () => [keys.legs.list(commissionId), keys.standing.detail(commissionId)],
-    onDone: (saved) => setRevision(saved.revision),
   });
   const { values, set, errorAt } = form;
   const theirs = form.act.problem?.code === 'stale-revision' ? (form.act.problem.problem.current as LegView) : null;
@@ -101,7 +100,7 @@ function EditLeg({ commissionId, leg, own }: { commissionId: string; leg: LegVie
             ...(own ? [line('note', 'Own note', theirs.privateNote ?? '')] : []),
           ]}
           onSaveMine={() => {
-            setRevision(theirs.revision);
+            form.patch({ revision: theirs.revision.toString() });
             form.act.run({
               params: { commissionId, legId: leg.id },
               body: {

@@ -1,5 +1,4 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { useState } from 'react';
 import * as contracts from '../../../../shared/contracts/shops.ts';
 import type { ShopView } from '../../../../shared/contracts/shops.ts';
 import { SHOP_ROLES, SHOP_TINTS, type ShopRole, type ShopTint } from '../../../../shared/contracts/vocabulary.ts';
@@ -21,7 +20,6 @@ const ROLE_WORDS: Readonly<Record<ShopRole, string>> = { owner: 'Owner', hand: '
 type ShopField = 'name' | 'craft' | 'country' | 'timeZone' | 'tint';
 
 function ShopForm({ shop }: { shop: ShopView }) {
-  const [revision, setRevision] = useState(shop.revision);
   const form = useContractForm(contracts.updateShop, {
     name: `shop-${shop.id}`,
     initial: {
@@ -30,13 +28,13 @@ function ShopForm({ shop }: { shop: ShopView }) {
       country: shop.country,
       timeZone: shop.timeZone,
       tint: shop.tint,
+      revision: shop.revision.toString(),
     },
     toInput: (values) => ({
       params: { shopId: shop.id },
-      body: { revision, ...values, tint: values.tint },
+      body: { ...values, revision: Number(values.revision) },
     }),
     stale: () => [keys.shops.detail(shop.id), keys.me()],
-    onDone: (saved) => setRevision(saved.revision),
   });
   const { values, set, errorAt } = form;
   const theirs = form.act.problem?.code === 'stale-revision' ? (form.act.problem.problem.current as ShopView) : null;
@@ -74,7 +72,7 @@ function ShopForm({ shop }: { shop: ShopView }) {
           <TextInput value={values.timeZone} onChange={(event) => set('timeZone', event.target.value)} />
         </Field>
         <Field label="Tint" hint="Of your half of a ring">
-          <Select value={values.tint} onChange={(event) => set('tint', event.target.value)}>
+          <Select value={values.tint} onChange={(event) => set('tint', event.target.value as ShopTint)}>
             {SHOP_TINTS.map((tint) => (
               <option key={tint} value={tint}>
                 {tint.replace('-', ' ')}
@@ -98,10 +96,10 @@ function ShopForm({ shop }: { shop: ShopView }) {
             line('tint', 'Tint'),
           ]}
           onSaveMine={() => {
-            setRevision(theirs.revision);
+            form.patch({ revision: theirs.revision.toString() });
             form.act.run({
               params: { shopId: shop.id },
-              body: { revision: theirs.revision, ...values, tint: values.tint },
+              body: { ...values, revision: theirs.revision },
             });
           }}
         />
