@@ -41,7 +41,11 @@ export async function openRealtime(): Promise<void> {
     setUp(true);
     for (const listener of connected) listener();
   });
-  made.on('disconnect', () => setUp(false));
+  made.on('disconnect', (reason) => {
+    setUp(false);
+    // The server cuts connections whose rights changed; the library does not come back from that by itself.
+    if (reason === 'io server disconnect') made.connect();
+  });
   made.on('connect_error', () => setUp(false));
   made.onAny((name: string, payload: unknown) => {
     if (name === PRESENCE_EVENT) for (const listener of presence) listener(payload as ThreadPresence);

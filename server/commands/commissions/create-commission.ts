@@ -30,6 +30,7 @@ export const createCommission = (ctx: RequestContext, { body }: ParsedInput<type
       subjectId: row.id,
       words: `Opened the commission ${row.title}`,
     });
+    uow.announce('membership.changed', { commissionId: row.id }, { to: 'keys', keys: [leadShopId] });
     uow.announce('commission.changed', { commissionId: row.id }, { to: 'everyone', commissionId: row.id });
     return uow.manager.findOneByOrFail(Commission, { id: row.id });
   });

@@ -1,4 +1,3 @@
-import { createHash, randomBytes } from 'node:crypto';
 import { IsNull, MoreThan } from 'typeorm';
 import type { inviteParty as contract } from '../../../shared/contracts/commissions.ts';
 import type { ParsedInput } from '../../../shared/contracts/route.ts';
@@ -9,6 +8,7 @@ import { Invitation } from '../../entities/invitation.ts';
 import { AppError, InputInvalid } from '../../errors.ts';
 import type { RequestContext } from '../../http/context.ts';
 import { authorize } from '../../policies/authorize.ts';
+import { newLinkToken } from '../../security/tokens.ts';
 
 const FOURTEEN_DAYS_MS = 14 * 24 * 60 * 60 * 1000;
 
@@ -34,12 +34,12 @@ export const inviteParty = (ctx: RequestContext, { params, body }: ParsedInput<t
         'already-there',
         'An invitation to this address is waiting. Take it back first to send another.',
       );
-    const token = randomBytes(32).toString('base64url');
+    const { token, tokenHash } = newLinkToken();
     const roles: PartyRole[] = body.kind === 'shop' ? body.roles : [body.kind];
     const row = await uow.manager.save(
       uow.manager.create(Invitation, {
         email: body.email,
-        tokenHash: createHash('sha256').update(token).digest('hex'),
+        tokenHash,
         commissionId: commission.id,
         roles,
         guestSees: body.kind === 'guest' ? body.sees : [],
