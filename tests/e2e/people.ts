@@ -20,7 +20,8 @@ export async function signIn(
   await page.getByLabel('E-mail').fill(email);
   await page.getByLabel('Password', { exact: true }).fill(DEMO_PASSWORD);
   await page.getByRole('button', { name: 'Sign in' }).click();
-  await expect(page.getByRole('link', { name: 'Commissions' })).toBeVisible();
+  await page.waitForURL((url) => url.pathname === '/');
+  await expect(page.getByRole('heading', { level: 1 })).toBeVisible();
   return page;
 }
 

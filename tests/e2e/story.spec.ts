@@ -218,7 +218,7 @@ test('a tight fit, a rework note with photographs, an agreed day, and one answer
     await installer.getByLabel('What will be done').fill(SECRETS.method);
     await installer.getByLabel('Cost, EUR').fill(SECRETS.cost);
     await installer.getByRole('button', { name: 'Answer with this rework note' }).click();
-    await expect(maker.getByText(SECRETS.method).first()).toBeVisible();
+    await expect(maker.locator('p', { hasText: SECRETS.method })).toBeVisible();
     await maker.getByRole('button', { name: 'Agree to this rework' }).click();
     await expect(installer.getByRole('button', { name: 'Begin the rework' })).toBeVisible();
     await expect(client.getByTestId('headline')).toContainText('Nothing will show');
