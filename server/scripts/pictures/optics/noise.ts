@@ -1,6 +1,10 @@
 /** Repeatable noise: the same whole numbers and seed always give the same value, 0 to under 1. */
 export function hash(x: number, y: number, z: number, seed: number): number {
-  let h = Math.imul(x | 0, 374761393) ^ Math.imul(y | 0, 668265263) ^ Math.imul(z | 0, 1274126177) ^ Math.imul(seed | 0, 1103515245);
+  let h =
+    Math.imul(x | 0, 374761393) ^
+    Math.imul(y | 0, 668265263) ^
+    Math.imul(z | 0, 1274126177) ^
+    Math.imul(seed | 0, 1103515245);
   h = Math.imul(h ^ (h >>> 15), 2246822519);
   h = Math.imul(h ^ (h >>> 13), 3266489917);
   return ((h ^ (h >>> 16)) >>> 0) / 4294967296;

@@ -75,7 +75,7 @@ export function blob(radius: number, flatten: number): Shape {
 
 /** A wire or cord through `points`, drawn as a smooth curve. */
 export function cord(points: readonly Vec3[], radius: number): Shape {
-  const path = smoothPath(points, 10);
+  const path = smoothPath(points, 7);
   const low: [number, number, number] = [1e9, 1e9, 1e9];
   const high: [number, number, number] = [-1e9, -1e9, -1e9];
   for (const point of path)
@@ -119,13 +119,18 @@ function smoothPath(points: readonly Vec3[], steps: number): Vec3[] {
   const at = (index: number): Vec3 => points[Math.min(Math.max(index, 0), points.length - 1)] ?? [0, 0, 0];
   const path: Vec3[] = [];
   for (let leg = 0; leg < points.length - 1; leg += 1)
-    for (let step = 0; step < steps; step += 1) path.push(between(at(leg - 1), at(leg), at(leg + 1), at(leg + 2), step / steps));
+    for (let step = 0; step < steps; step += 1)
+      path.push(between(at(leg - 1), at(leg), at(leg + 1), at(leg + 2), step / steps));
   path.push(at(points.length - 1));
   return path;
 }
 
 function between(a: Vec3, b: Vec3, c: Vec3, d: Vec3, t: number): Vec3 {
   const one = (k: 0 | 1 | 2): number =>
-    0.5 * (2 * b[k] + (c[k] - a[k]) * t + (2 * a[k] - 5 * b[k] + 4 * c[k] - d[k]) * t * t + (3 * b[k] - a[k] - 3 * c[k] + d[k]) * t * t * t);
+    0.5 *
+    (2 * b[k] +
+      (c[k] - a[k]) * t +
+      (2 * a[k] - 5 * b[k] + 4 * c[k] - d[k]) * t * t +
+      (3 * b[k] - a[k] - 3 * c[k] + d[k]) * t * t * t);
   return [one(0), one(1), one(2)];
 }

@@ -14,7 +14,10 @@ export type Relief = (distance: number, x: number, angle: number, radius: number
  * as a turner breaks them.
  */
 export function turned(outline: readonly Corner[], options: { bevelMm?: number; relief?: Relief } = {}): Shape {
-  const corners = bevelled(outline.map(([x, r]): Corner => [x, r === 0 ? -4 : r]), options.bevelMm ?? 0.35);
+  const corners = bevelled(
+    outline.map(([x, r]): Corner => [x, r === 0 ? -4 : r]),
+    options.bevelMm ?? 0.35,
+  );
   const xs = corners.map(([x]) => x);
   const lowX = Math.min(...xs);
   const highX = Math.max(...xs);
@@ -36,7 +39,10 @@ export function turned(outline: readonly Corner[], options: { bevelMm?: number; 
 }
 
 /** The closed outline of a bar with given radii at given places, from the axis and back to it, or down to a bore. */
-export function outlineOf(outside: readonly Corner[], bore?: { radius: number; depth: number; from: 'start' | 'end' }): Corner[] {
+export function outlineOf(
+  outside: readonly Corner[],
+  bore?: { radius: number; depth: number; from: 'start' | 'end' },
+): Corner[] {
   const first = outside[0]?.[0] ?? 0;
   const last = outside.at(-1)?.[0] ?? 0;
   if (!bore) return [[first, 0], ...outside, [last, 0]];
@@ -82,7 +88,12 @@ function bevelled(corners: readonly Corner[], size: number): Corner[] {
 }
 
 /** Signed distance to the outline on a grid, read between its points. */
-function distanceGrid(corners: readonly Corner[], lowX: number, highX: number, highR: number): (x: number, r: number) => number {
+function distanceGrid(
+  corners: readonly Corner[],
+  lowX: number,
+  highX: number,
+  highR: number,
+): (x: number, r: number) => number {
   const columns = Math.ceil((highX - lowX) / CELL_MM) + 2;
   const rows = Math.ceil(highR / CELL_MM) + 2;
   const values = new Float32Array(columns * rows);
@@ -90,8 +101,10 @@ function distanceGrid(corners: readonly Corner[], lowX: number, highX: number, h
     for (let row = 0; row < rows; row += 1)
       values[row * columns + column] = outlineDistance(corners, lowX + column * CELL_MM, row * CELL_MM);
   return (x, r) => {
-    const fx = Math.min(Math.max((x - lowX) / CELL_MM, 0), columns - 1.001);
-    const fr = Math.min(r / CELL_MM, rows - 1.001);
+    const gx = (x - lowX) / CELL_MM;
+    const gr = r / CELL_MM;
+    const fx = Math.min(Math.max(gx, 0), columns - 1.001);
+    const fr = Math.min(gr, rows - 1.001);
     const column = Math.floor(fx);
     const row = Math.floor(fr);
     const u = fx - column;
@@ -99,7 +112,10 @@ function distanceGrid(corners: readonly Corner[], lowX: number, highX: number, h
     const at = row * columns + column;
     const low = (values[at] ?? 0) * (1 - u) + (values[at + 1] ?? 0) * u;
     const high = (values[at + columns] ?? 0) * (1 - u) + (values[at + columns + 1] ?? 0) * u;
-    return low + (high - low) * v;
+    const near = low + (high - low) * v;
+    // Off the grid the way to its edge is added, so that distances far off are never short.
+    const off = Math.abs(gx - fx) + Math.max(gr - fr, 0);
+    return off < 0.01 ? near : Math.hypot(gx - fx, gr - fr) * CELL_MM + near * 0.7;
   };
 }
 

@@ -11,13 +11,9 @@ export const cross = (a: Vec3, b: Vec3): Vec3 => [
 ];
 export const unit = (a: Vec3): Vec3 => times(a, 1 / Math.hypot(a[0], a[1], a[2]));
 
-export const clamp = (value: number, low: number, high: number): number => (value < low ? low : value > high ? high : value);
+export const clamp = (value: number, low: number, high: number): number =>
+  value < low ? low : value > high ? high : value;
 export const mix = (a: number, b: number, share: number): number => a + (b - a) * share;
-export const mixColour = (a: Vec3, b: Vec3, share: number): Vec3 => [
-  mix(a[0], b[0], share),
-  mix(a[1], b[1], share),
-  mix(a[2], b[2], share),
-];
 /** 0 below `low`, 1 above `high`, smooth between. */
 export const smooth = (low: number, high: number, value: number): number => {
   const t = clamp((value - low) / (high - low), 0, 1);
