@@ -2,13 +2,25 @@ import { cpus, loadavg } from 'node:os';
 import pg from 'pg';
 import { createDataSource } from '../../server/db/data-source.ts';
 import { runMigrations } from '../../server/db/migrate.ts';
+import { coldStart } from './measurements/cold-start.ts';
+import { deep } from './measurements/deep.ts';
+import { fanOut } from './measurements/fan-out.ts';
+import { firstLoad } from './measurements/first-load.ts';
 import { pages } from './measurements/pages.ts';
+import { post } from './measurements/post.ts';
 import type { Bench, Measurement } from './support/bench.ts';
 import { pinLoadAndDatabase } from './support/cores.ts';
 import { fillDatabase, type Data } from './support/data.ts';
 import { printTable } from './support/report.ts';
 
-const MEASUREMENTS: Readonly<Record<string, Measurement>> = { pages };
+const MEASUREMENTS: Readonly<Record<string, Measurement>> = {
+  pages,
+  post,
+  'fan-out': fanOut,
+  deep,
+  'cold-start': coldStart,
+  'first-load': firstLoad,
+};
 
 const say = (words: string): void => void process.stdout.write(`${words}\n`);
 

@@ -1,0 +1,86 @@
+import fc from 'fast-check';
+import { unit } from 'mathjs';
+import { describe, expect, it } from 'vitest';
+import { MINOR_DIGITS } from '../../../shared/units/money.ts';
+import {
+  formatLength,
+  formatUm,
+  looksLikeUnitMixUp,
+  MM_PER_INCH,
+  nearestFraction,
+  parseLength,
+} from '../../../shared/units/length.ts';
+
+const valueOf = (typed: string, hint?: 'mm' | 'inch' | 'inch-fraction'): number | string => {
+  const read = parseLength(typed, hint);
+  return read.ok ? read.valueMm : read.reason;
+};
+
+describe('the inch', () => {
+  it('is 25.4 mm exactly (international yard and pound agreement, 1959)', () => expect(MM_PER_INCH).toBe(25.4));
+
+  it('agrees with an independent library of units', () => {
+    fc.assert(
+      fc.property(fc.double({ min: 0.001, max: 40, noNaN: true }), (inches) => {
+        expect(inches * MM_PER_INCH).toBeCloseTo(unit(inches, 'inch').toNumber('mm'), 9);
+      }),
+    );
+  });
+});
+
+describe('typed lengths', () => {
+  it.each([
+    ['31.957', 31.957],
+    ['31,957 mm', 31.957],
+    [' 31.957mm ', 31.957],
+    ['.5', 0.5],
+    ['1.2582 in', 1.2582 * 25.4],
+    ['1.2582"', 1.2582 * 25.4],
+    ['1 1/4', 31.75],
+    ['1-17/64 in', (1 + 17 / 64) * 25.4],
+    ['63/64"', (63 / 64) * 25.4],
+    ['7/8 inch', 22.225],
+  ])('%s is %s mm', (typed, mm) => expect(valueOf(typed)).toBeCloseTo(mm, 9));
+
+  it('takes the unit of a bare number from the hint, and a mark in the text over it', () => {
+    expect(valueOf('1.25', 'inch')).toBeCloseTo(31.75, 9);
+    expect(valueOf('31.75 mm', 'inch')).toBeCloseTo(31.75, 9);
+  });
+
+  it.each([
+    ['', 'empty'],
+    ['1,234.5', 'ambiguous'],
+    ['12 34', 'unreadable'],
+    ['a lot', 'unreadable'],
+    ['-3', 'not-positive'],
+    ['0', 'not-positive'],
+    ['1/0', 'zero-denominator'],
+    ['3/4 mm', 'unreadable'],
+  ])('%j is refused: %s', (typed, reason) => expect(valueOf(typed)).toBe(reason));
+
+  it('points at a unit mixed up', () => {
+    expect([looksLikeUnitMixUp(1.26, 32), looksLikeUnitMixUp(32000, 32), looksLikeUnitMixUp(31.9, 32)]).toEqual([
+      true,
+      true,
+      false,
+    ]);
+  });
+});
+
+describe('shown lengths', () => {
+  it("say a fraction's error when it is not exact", () => {
+    expect(formatLength(22.225, 'inch-fraction')).toBe('7/8 in');
+    expect(formatLength(32, 'inch-fraction')).toMatch(/^1 17\/64 in − \d+ µm$/);
+    expect(formatUm(-43)).toBe('−43 µm');
+  });
+
+  it('the nearest 64th is never further than half a step', () => {
+    fc.assert(
+      fc.property(fc.double({ min: 0.5, max: 200, noNaN: true }), (mm) => {
+        expect(Math.abs(nearestFraction(mm).errorUm)).toBeLessThanOrEqual((25_400 / 128) * 1.000001);
+      }),
+    );
+  });
+});
+
+it('minor units are those of ISO 4217', () => expect(MINOR_DIGITS).toEqual({ EUR: 2, USD: 2, GBP: 2, JPY: 0, KWD: 3 }));
