@@ -75,7 +75,12 @@ export const firstLoad: Measurement = {
       lines.push({ what: 'style sheets, all', figure: kilobytes(await gzipBytes(css)), detail: `${css.size} file` });
       const page = (await read(ENTRY)).toString();
       for (const [, font] of page.matchAll(/href="\/(assets\/[^"]+\.woff2)"/g))
-        if (font) lines.push({ what: 'font preloaded by the page', figure: kilobytes((await read(font)).length), detail: font.replace(/^assets\/|-[^-]+(?=\.woff2)/g, '') });
+        if (font)
+          lines.push({
+            what: 'font preloaded by the page',
+            figure: kilobytes((await read(font)).length),
+            detail: font.replace(/^assets\/|-[^-]+(?=\.woff2)/g, ''),
+          });
       return lines;
     } finally {
       await rm(folder, { recursive: true, force: true });

@@ -12,7 +12,11 @@ const CONNECTIONS = 16;
 const BODY = 'The collar sits now; the pommel thread wants one more light pass before it goes on its way.';
 
 /** A new message each time, by writer and thread in turn. */
-function postsOf({ writers, posts }: Data, pathOf: (place: Data['posts'][number]) => string, origin: string): Request[] {
+function postsOf(
+  { writers, posts }: Data,
+  pathOf: (place: Data['posts'][number]) => string,
+  origin: string,
+): Request[] {
   let turn = 0;
   return [
     {
@@ -82,7 +86,10 @@ export const post: Measurement = {
         bench.rounds,
       );
       const stored = (await countOf(bench, 'message')) - before;
-      await assertSequences(bench, data.posts.map((place) => place.threadId));
+      await assertSequences(
+        bench,
+        data.posts.map((place) => place.threadId),
+      );
       return [
         {
           what: `message posted by 16 writers into ${data.posts.length} threads`,
