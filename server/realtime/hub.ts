@@ -13,6 +13,7 @@ import { comesFromOwnOrigin } from '../http/middleware/same-origin.ts';
 import { keysOf, type EventAudience } from '../outbox/audience.ts';
 import type { OutgoingMessage } from '../outbox/relay.ts';
 import type { Services } from '../services.ts';
+import { handshakeAccountId } from './handshake-session.ts';
 import { Presence } from './presence.ts';
 import { roomsOf, mayReadThread, personOf } from './socket-rights.ts';
 
@@ -45,8 +46,7 @@ export class Hub {
           comesFromOwnOrigin({ origin: req.headers.origin, fetchSite: req.headers['sec-fetch-site'] }, PUBLIC_ORIGIN),
         ),
     });
-    this.io.engine.use(session);
-    this.io.use((socket, next) => void this.#admit(socket, next));
+    this.io.use((socket, next) => void this.#admit(session, socket, next));
     this.io.on('connection', (socket) => this.#serve(socket));
   }
 
@@ -66,9 +66,9 @@ export class Hub {
     await this.io.close();
   }
 
-  async #admit(socket: AppSocket, next: (error?: Error) => void): Promise<void> {
+  async #admit(session: RequestHandler, socket: AppSocket, next: (error?: Error) => void): Promise<void> {
     try {
-      const accountId = (socket.request as unknown as { session?: { accountId?: string } }).session?.accountId;
+      const accountId = await handshakeAccountId(session, socket.request);
       const person = accountId ? await personOf(this.#services.db.manager, accountId) : null;
       if (!person) return next(new Error('not-signed-in'));
       socket.data.accountId = person.accountId;
@@ -82,8 +82,6 @@ export class Hub {
   }
 
   #serve(socket: AppSocket): void {
-    // The handshake request is of no more use, and it is most of an idle connection's memory.
-    (socket.conn as unknown as { request: unknown }).request = undefined;
     this.#on(socket, 'thread.enter', async ({ commissionId, threadId }) => {
       if (!(await mayReadThread(this.#services.db.manager, socket.data.accountId, commissionId, threadId)))
         return 'not-found';
