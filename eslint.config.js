@@ -17,7 +17,10 @@ export default tseslint.config(
     },
     rules: {
       '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
-      '@typescript-eslint/no-misused-promises': ['error', { checksVoidReturn: { attributes: false, arguments: false } }],
+      '@typescript-eslint/no-misused-promises': [
+        'error',
+        { checksVoidReturn: { attributes: false, arguments: false } },
+      ],
       '@typescript-eslint/consistent-type-imports': 'error',
       '@typescript-eslint/no-explicit-any': 'error',
       '@typescript-eslint/restrict-template-expressions': ['error', { allowNumber: true }],
@@ -25,9 +28,26 @@ export default tseslint.config(
       'no-console': 'error',
     },
   },
-  { files: ['src/**/*.{ts,tsx}'], extends: [hooks.configs.flat['recommended-latest'], ...query.configs['flat/recommended']] },
+  {
+    files: ['src/**/*.{ts,tsx}'],
+    extends: [hooks.configs.flat['recommended-latest'], ...query.configs['flat/recommended']],
+  },
   {
     files: ['server/scripts/**/*.mjs', '*.js', '*.cjs'],
-    languageOptions: { globals: { process: 'readonly', console: 'readonly', URL: 'readonly', fetch: 'readonly', setTimeout: 'readonly', clearTimeout: 'readonly', setInterval: 'readonly', clearInterval: 'readonly', Buffer: 'readonly', module: 'writable', AbortSignal: 'readonly' } },
+    languageOptions: {
+      globals: {
+        process: 'readonly',
+        console: 'readonly',
+        URL: 'readonly',
+        fetch: 'readonly',
+        setTimeout: 'readonly',
+        clearTimeout: 'readonly',
+        setInterval: 'readonly',
+        clearInterval: 'readonly',
+        Buffer: 'readonly',
+        module: 'writable',
+        AbortSignal: 'readonly',
+      },
+    },
   },
 );

@@ -71,7 +71,7 @@ const CONSTRAINT_PROBLEMS: Record<string, [ProblemCode, string]> = {
   message_author_client_id_key: ['already-there', 'A message with this id is in another thread.'],
 };
 
-const constraintOf = (thrown: QueryFailedError): string | undefined =>
+const constraintOf = (thrown: { driverError: unknown }): string | undefined =>
   (thrown.driverError as { constraint?: string }).constraint;
 
 /** Codes of pg and of the network that mean "not now": the database is restarting or cannot be reached. */

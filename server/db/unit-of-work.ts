@@ -50,7 +50,7 @@ export class UnitOfWork {
     if (this.#outgoing.length > 0)
       await this.manager.insert(
         OutboxMessage,
-        this.#outgoing.map(({ topic, payload }) => ({ topic, payload: payload as object })),
+        this.#outgoing.map(({ topic, payload }) => ({ topic, payload: payload })),
       );
     this.#history.length = 0;
     this.#outgoing.length = 0;

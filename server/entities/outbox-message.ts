@@ -12,7 +12,7 @@ export class OutboxMessage {
   topic!: string;
 
   @Column({ type: 'jsonb' })
-  payload!: Record<string, unknown>;
+  payload!: object;
 
   @CreateDateColumn({ type: 'timestamptz' })
   createdAt!: Date;

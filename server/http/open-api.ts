@@ -20,6 +20,7 @@ function responsesOf(route: AnyRoute): Record<string, object> {
     ...route.problems,
     'input-invalid' as const,
     ...(route.access === 'signed-in' ? (['not-signed-in'] as const) : []),
+    ...(route.keyed ? (['idempotency-key-missing', 'idempotency-key-reused'] as const) : []),
   ];
   const byStatus = new Map<number, Set<string>>();
   for (const code of codes) {

@@ -68,7 +68,9 @@ export class OutboxRelay {
   async #drain(): Promise<void> {
     for (;;) {
       const batch = await this.#claim();
-      for (const message of batch) await this.#send(message);
+      const heard: string[] = [];
+      for (const message of batch) if (await this.#send(message)) heard.push(message.id);
+      if (heard.length > 0) await this.#markSent(heard);
       if (batch.length < BATCH || this.#stopped) return;
     }
   }
@@ -85,21 +87,30 @@ export class OutboxRelay {
     return rows.sort((one, other) => (BigInt(one.id) < BigInt(other.id) ? -1 : 1));
   }
 
-  async #send(message: OutgoingMessage): Promise<void> {
+  /** @returns whether the message is still to be marked: events are marked a batch at a time, a letter at once. */
+  async #send(message: OutgoingMessage): Promise<boolean> {
     const kind = message.topic.startsWith('mail:') ? 'mail' : 'event';
     try {
       await this.#handlers[kind](message);
-      // A letter's payload holds the token of its link, which is nowhere else but hashed; it goes once the letter is out.
-      await this.#db.query(`UPDATE "outbox_message" SET "sent_at" = now(), "payload" = '{}'::jsonb WHERE "id" = $1`, [
-        message.id,
-      ]);
+      // Hearing an event twice is nothing; getting a letter twice is noticed.
+      if (kind === 'mail') await this.#markSent([message.id]);
+      return kind === 'event';
     } catch (error) {
       this.#log.warn({ err: error, topic: message.topic, attempts: message.attempts }, 'outbox message not sent');
       await this.#db.query(
         `UPDATE "outbox_message" SET "leased_until" = now() + make_interval(secs => $2) WHERE "id" = $1`,
         [message.id, backoffS(message.attempts)],
       );
+      return false;
     }
+  }
+
+  /** A letter's payload holds the token of its link, which is nowhere else but hashed; it goes once the letter is out. */
+  async #markSent(ids: readonly string[]): Promise<void> {
+    await this.#db.query(
+      `UPDATE "outbox_message" SET "sent_at" = now(), "payload" = '{}'::jsonb WHERE "id" = ANY($1)`,
+      [ids],
+    );
   }
 }
 

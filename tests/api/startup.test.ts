@@ -117,7 +117,7 @@ describe('requests that are not from the product itself', () => {
       'malformed-request',
     ],
   ])('%s is refused', async (_case, headers, code) => {
-    const response = await send(headers as Record<string, string>);
+    const response = await send(headers);
     // RFC 9457: media type and members of a problem.
     expect(response.headers.get('content-type')).toContain('application/problem+json');
     const problem = (await response.json()) as Record<string, unknown>;

@@ -15,6 +15,9 @@ const ANYWHERE: readonly ProblemCode[] = [
   'too-large',
 ];
 
+/** Problems that any keyed route may answer with. */
+const KEYED: readonly ProblemCode[] = ['idempotency-key-missing', 'idempotency-key-reused'];
+
 export type Outcome<T extends AnyRoute> =
   { ok: true; status: number; body: RouteOutput<T> } | { ok: false; status: number; problem: Problem };
 
@@ -64,9 +67,10 @@ export class TestClient {
     if (!response.ok) {
       expect(response.headers.get('content-type')).toContain('application/problem+json');
       const problem = problemSchema.parse(await response.json());
-      expect([...route.problems, ...ANYWHERE], `${route.method} ${route.path} answered ${problem.code}`).toContain(
-        problem.code,
-      );
+      expect(
+        [...route.problems, ...ANYWHERE, ...(route.keyed ? KEYED : [])],
+        `${route.method} ${route.path} answered ${problem.code}`,
+      ).toContain(problem.code);
       return { ok: false, status: response.status, problem };
     }
     const answered: unknown = response.status === 204 ? {} : await response.json();

@@ -1,6 +1,6 @@
 import { randomInt, randomUUID } from 'node:crypto';
 import { pathToFileURL } from 'node:url';
-import { EntityManager } from 'typeorm';
+import type { EntityManager } from 'typeorm';
 import { encodeCode } from '../../../shared/engines/codes/crockford.ts';
 import { addDays, isWorkingDay, type IsoDay } from '../../../shared/units/calendar-day.ts';
 import { parseLength } from '../../../shared/units/length.ts';

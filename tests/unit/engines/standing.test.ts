@@ -237,7 +237,7 @@ const someFacts: fc.Arbitrary<CommissionFacts> = fc.record({
     { selector: (one) => one.id },
   ),
   threads: fc.array(fc.record({ audience: fc.string(), lastMessage: fc.string() })),
-}) as fc.Arbitrary<CommissionFacts>;
+});
 
 /** Every fact that a client may not see, changed to something else. */
 const changeSecrets = (all: CommissionFacts, word: string, figure: number): CommissionFacts => ({
