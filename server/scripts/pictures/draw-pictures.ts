@@ -9,6 +9,8 @@ import type { Picture } from './picture.ts';
 export const PICTURES_FOLDER = new URL('../../db/seeds/pictures/', import.meta.url);
 
 const MOST_BYTES = 96_000;
+const BEST_QUALITY = 80;
+const LEAST_QUALITY = 50;
 /** Traced at three quarters of the size and enlarged: a telephone's lens is no sharper, and it takes half the time. */
 const TRACED_SHARE = 0.75;
 
@@ -23,7 +25,7 @@ export async function drawPicture(
   return { pixels: develop(expose(scene, size), size, scene.film), width: size.width, height: size.height };
 }
 
-/** A drawn picture as JPEG at its full size, as good as fits the bytes allowed. */
+/** A drawn picture as JPEG at its full size, as good as fits the bytes allowed; busy ones stop at the least quality. */
 export async function asJpeg(
   picture: Picture,
   drawn: { pixels: Buffer; width: number; height: number },
@@ -34,10 +36,12 @@ export async function asJpeg(
     .raw()
     .toBuffer();
   const raw = { raw: { width: picture.width, height: picture.height, channels: 3 as const } };
-  for (let quality = 80; ; quality -= 3) {
-    const jpeg = await sharp(enlarged, raw).jpeg({ quality, mozjpeg: true }).toBuffer();
-    if (jpeg.length <= MOST_BYTES || quality <= 50) return jpeg;
-  }
+  const encoded = (quality: number): Promise<Buffer> =>
+    sharp(enlarged, raw).jpeg({ quality, mozjpeg: true }).toBuffer();
+  let jpeg = await encoded(BEST_QUALITY);
+  for (let quality = BEST_QUALITY - 3; jpeg.length > MOST_BYTES && quality >= LEAST_QUALITY; quality -= 3)
+    jpeg = await encoded(quality);
+  return jpeg;
 }
 
 /** Draws the pictures whose file names are given, or all of them, into the demo's folder. */

@@ -79,7 +79,7 @@ export const SALT_BENCH_PICTURES: readonly Picture[] = [
       upDeg: 24,
       distance: 210,
       fieldDeg: 40,
-      openingMm: 3.2,
+      openingMm: 1.9,
       focus: [-8, 28, 22],
     }),
     bench: cuttingMat({ seed: 23 }),
