@@ -8,6 +8,7 @@ import { fanOut } from './measurements/fan-out.ts';
 import { firstLoad } from './measurements/first-load.ts';
 import { pages } from './measurements/pages.ts';
 import { post } from './measurements/post.ts';
+import { upload } from './measurements/upload.ts';
 import type { Bench, Measurement } from './support/bench.ts';
 import { pinLoadAndDatabase } from './support/cores.ts';
 import { fillDatabase, type Data } from './support/data.ts';
@@ -18,6 +19,7 @@ const MEASUREMENTS: Readonly<Record<string, Measurement>> = {
   post,
   'fan-out': fanOut,
   deep,
+  upload,
   'cold-start': coldStart,
   'first-load': firstLoad,
 };

@@ -21,6 +21,7 @@ export interface Running {
 
 const START_LIMIT_MS = 60_000;
 const POLL_MS = 5;
+const DRAIN_MS = 500;
 
 /** Resident memory of a process, bytes. The child is `taskset` turned into node, so its id is the program's. */
 export const residentBytes = (child: ChildProcess): number => {
@@ -68,6 +69,8 @@ async function start(program: Program, port: number, folder: string): Promise<Ru
   });
   const origin = `http://127.0.0.1:${port}`;
   const stop = async (): Promise<void> => {
+    // Requests that the load let go of at its end are still being answered.
+    await pause(DRAIN_MS);
     child.kill('SIGTERM');
     await ended(child);
     await rm(folder, { recursive: true, force: true });
