@@ -40,11 +40,7 @@ export function MeasureRow({ label, value, enteredAs, emphasised = false, tone =
       </th>
       <td
         title={enteredAs}
-        className={joinClasses(
-          'px-2 py-1.5 text-right whitespace-nowrap figures',
-          emphasised && 'font-bold',
-          VALUE_TONES[tone],
-        )}
+        className={joinClasses('px-2 py-1.5 text-right figures', emphasised && 'font-bold', VALUE_TONES[tone])}
       >
         {value}
       </td>

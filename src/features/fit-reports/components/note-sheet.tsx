@@ -51,13 +51,13 @@ export function NoteSheet({
         <MeasureRow label="per side" value={formatMm(note.removeOnDiameterUm / 2000)} />
         {note.overLengthMm !== null && <MeasureRow label="over" value={formatMm(note.overLengthMm, 1)} />}
         <MeasureRow label="Shows when closed" value={note.shows ? note.whereItShows : 'no'} />
-        {note.risk && <MeasureRow label="Risk" value={note.risk} />}
         <MeasureRow
           label="Cost"
           value={`${formatMinor(note.costMinor, note.currency)}${note.costBorneByPartyId ? `, borne by ${nameOf(note.costBorneByPartyId)}` : ''}`}
         />
         <MeasureRow label="Takes" value={note.effectDays === 1 ? '1 working day' : `${note.effectDays} working days`} />
       </MeasureTable>
+      {note.risk && <p className="pt-3 text-note">What could go wrong: {note.risk}</p>}
       {note.consent?.words && <p className="pt-3 text-note">The client: “{note.consent.words}”</p>}
     </Sheet>
   );

@@ -68,17 +68,19 @@ export function ThreadSheet({
         </Button>
       )}
       {!pending && messages.length === 0 && <EmptyState title="Nothing written yet">Read by: {audience}.</EmptyState>}
-      <ol aria-label={`Messages in ${thread.title}`} role="log" data-testid={`thread-${thread.audience}`}>
-        {messages.map((message) => (
-          <MessageRow
-            key={message.id}
-            message={message}
-            commissionId={commissionId}
-            partyName={nameOf(message.authorPartyId)}
-            namesYou={message.mentionedAccountIds.includes(me.id)}
-          />
-        ))}
-      </ol>
+      <div role="log" aria-label={`Messages in ${thread.title}`} data-testid={`thread-${thread.audience}`}>
+        <ol>
+          {messages.map((message) => (
+            <MessageRow
+              key={message.id}
+              message={message}
+              commissionId={commissionId}
+              partyName={nameOf(message.authorPartyId)}
+              namesYou={message.mentionedAccountIds.includes(me.id)}
+            />
+          ))}
+        </ol>
+      </div>
       <p className="min-h-6 py-1 text-note text-lead-grey" aria-live="polite">
         {typing.length > 0
           ? `${typing.join(', ')} ${typing.length === 1 ? 'is' : 'are'} writing`
