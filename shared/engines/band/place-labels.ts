@@ -9,40 +9,38 @@ export interface WantedLabel {
 
 /** Below this many characters a label says nothing any more and goes to the next lane. */
 const LEAST_CHARACTERS = 9;
-const MOST_LANES = 4;
 
 const shorten = (text: string, room: number): string =>
   text.length <= room ? text : room < 2 ? '' : `${text.slice(0, room - 1).trimEnd()}…`;
 
+const full = (label: WantedLabel): string => `${label.strong} ${label.plain}`.trim();
+
 /**
- * Puts labels of one row into lanes so that none meets another: each starts at its x, takes the lowest lane where enough
- * of it fits before the next label there, and is shortened to that room.
+ * Puts labels of one row into lanes so that none meets another: each starts at its x, or further left where it would run
+ * over the right edge, takes the lowest lane where enough of it fits before the next label there, and is shortened to that
+ * room. There are as many lanes as it takes, so that no label is lost on a crowded day.
  *
  * @param charactersAcross characters that fit the whole width
  */
 export function placeLabels(wanted: readonly WantedLabel[], charactersAcross: number): BandLabel[] {
-  const sorted = [...wanted].sort((one, other) => one.x - other.x);
-  const lanes: number[] = sorted.map(() => 0);
   const endOfLane: number[] = [];
-  const start = (label: WantedLabel, length: number): number =>
-    Math.min(label.x * charactersAcross, Math.max(0, charactersAcross - Math.min(length, charactersAcross)));
-
-  for (const [index, label] of sorted.entries()) {
-    const length = full(label).length;
-    let lane = 0;
-    // A lane is free where its last label can still keep the least room before this one starts.
-    while (lane < MOST_LANES - 1 && (endOfLane[lane] ?? -1) > start(label, Math.min(length, LEAST_CHARACTERS)))
-      lane += 1;
-    lanes[index] = lane;
-    endOfLane[lane] = start(label, length) + Math.min(length, LEAST_CHARACTERS) + 1;
-  }
-  return sorted.map((label, index) => {
-    const lane = lanes[index] ?? 0;
-    const next = sorted.findIndex((_other, at) => at > index && lanes[at] === lane);
-    const begin = start(label, full(label).length);
-    const nextLabel = sorted[next];
-    const limit = nextLabel ? start(nextLabel, full(nextLabel).length) - 1 : charactersAcross;
-    const room = Math.max(0, Math.floor(limit - begin));
+  // By where they begin and not by x: a long label near the right edge begins before shorter ones that stand left of it.
+  const placed = wanted
+    .map((label) => {
+      const { length } = full(label);
+      const begin = Math.min(label.x * charactersAcross, Math.max(0, charactersAcross - length));
+      return { label, begin, least: Math.min(length, LEAST_CHARACTERS) };
+    })
+    .sort((one, other) => one.begin - other.begin || one.label.x - other.label.x)
+    .map((one) => {
+      const free = endOfLane.findIndex((end) => end <= one.begin);
+      const lane = free < 0 ? endOfLane.length : free;
+      endOfLane[lane] = one.begin + one.least + 1;
+      return { ...one, lane };
+    });
+  return placed.map(({ label, begin, lane }, index) => {
+    const next = placed.find((other, at) => at > index && other.lane === lane);
+    const room = Math.floor((next ? next.begin - 1 : charactersAcross) - begin);
     const strong = shorten(label.strong, room);
     return {
       x: begin / charactersAcross,
@@ -54,5 +52,3 @@ export function placeLabels(wanted: readonly WantedLabel[], charactersAcross: nu
     };
   });
 }
-
-const full = (label: WantedLabel): string => `${label.strong} ${label.plain}`.trim();
