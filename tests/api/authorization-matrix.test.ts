@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { ALL_ROUTES, type NamedRoute } from '../../shared/contracts/all-routes.ts';
 import { API_BASE } from '../../shared/contracts/route.ts';
+import { putConsumables, USES_UP } from '../support/authorization-consumables.ts';
 import { BODIES, QUERIES, uploadFields } from '../support/authorization-requests.ts';
 import { OUTCOMES } from '../support/authorization-table.ts';
 import {
@@ -67,7 +68,9 @@ async function rowOf(route: NamedRoute, targetName: (typeof TARGETS)[number]): P
   const letters: string[] = [];
   for (const role of ROLES) {
     const client = ENDS_SESSION.has(route.name) ? await world.freshClient(role) : world.clients[role];
-    letters.push(letterOf(await ask(route, client, world.targets[targetName])));
+    const target = world.targets[targetName];
+    if (USES_UP.has(route.name) && targetName !== 'missing') await putConsumables(app, target);
+    letters.push(letterOf(await ask(route, client, target)));
   }
   return letters.join('');
 }

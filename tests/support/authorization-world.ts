@@ -3,18 +3,16 @@ import { Commission } from '../../server/entities/commission.ts';
 import { FitReport } from '../../server/entities/fit-report.ts';
 import { Handoff } from '../../server/entities/handoff.ts';
 import { HandoffOffer } from '../../server/entities/handoff-offer.ts';
-import { Invitation } from '../../server/entities/invitation.ts';
 import { Joint } from '../../server/entities/joint.ts';
 import { Leg } from '../../server/entities/leg.ts';
 import { Part } from '../../server/entities/part.ts';
 import { Party } from '../../server/entities/party.ts';
 import { ReworkNote } from '../../server/entities/rework-note.ts';
-import { StoredFile } from '../../server/entities/stored-file.ts';
-import { newObjectKey } from '../../server/integrations/storage/object-storage.ts';
 import { encodeCode } from '../../shared/engines/codes/crockford.ts';
 import { refreshCommissionNames } from '../../server/commands/commissions/refresh-members.ts';
 import { makeAccount, signedInAs } from '../factories/account.ts';
 import { makeMember, makeShop } from '../factories/shop.ts';
+import { putConsumables, type Consumables } from './authorization-consumables.ts';
 import { makeCommissionKit, makeThread, type CommissionKit, type KitParty } from './commission-kit.ts';
 import type { TestApp } from './test-app.ts';
 import { TestClient } from './test-client.ts';
@@ -23,12 +21,15 @@ import { TestClient } from './test-client.ts';
 export const ROLES = [
   'anonymous',
   'lead',
+  'leadHand',
   'bookkeeper',
   'maker',
+  'makerHand',
   'finisher',
   'client',
   'guest',
   'removed',
+  'expiredGuest',
   'outsider',
   'steward',
 ] as const;
@@ -39,13 +40,9 @@ export const TARGETS = ['own', 'other', 'foreign', 'missing'] as const;
 export type TargetName = (typeof TARGETS)[number];
 
 /** Everything a path or body may name, for one target. */
-export interface Target {
-  commissionId: string;
+export interface Target extends Consumables {
   shopId: string;
-  accountId: string;
   partyId: string;
-  invitationId: string;
-  shopInvitationId: string;
   partId: string;
   otherPartId: string;
   legId: string;
@@ -54,8 +51,6 @@ export interface Target {
   noteId: string;
   handoffId: string;
   offerId: string;
-  threadId: string;
-  fileId: string;
   leadPartyId: string;
   leadShopId: string;
 }
@@ -155,56 +150,19 @@ async function makeTarget(app: TestApp, kit: CommissionKit, party: KitParty): Pr
     onDay: '2027-03-01',
   });
   const threadId = await makeThread(app, kit, 'named', [party.partyId]);
-  const storageKey = newObjectKey();
-  await app.services.storage.put({ bytes: Buffer.from('hello') }, storageKey, { mediaType: 'text/plain' });
-  await manager.insert(StoredFile, {
-    id: ids.fileId,
-    commissionId,
-    place: 'thread',
-    placeId: threadId,
-    purpose: 'message',
-    name: 'note.txt',
-    mediaType: 'text/plain',
-    byteSize: '5',
-    sha256: 'x',
-    storageKey,
-    renditions: null,
-    addedByAccountId: party.person.id,
-  });
-  const letter = {
-    email: `${ids.invitationId}@x.test`,
-    roles: [],
-    guestSees: [],
-    invitedByAccountId: lead.person.id,
-    expiresAt: new Date(Date.now() + 86_400_000),
-  };
-  await manager.insert(Invitation, {
-    ...letter,
-    id: ids.invitationId,
-    tokenHash: randomUUID(),
-    commissionId,
-    roles: ['maker'],
-    shopId: null,
-    shopRole: null,
-  });
-  await manager.insert(Invitation, {
-    ...letter,
-    id: ids.shopInvitationId,
-    tokenHash: randomUUID(),
-    commissionId: null,
-    shopId: party.shopId,
-    shopRole: 'hand',
-  });
-  return {
+  const target = {
     ...ids,
     commissionId,
     threadId,
     shopId: party.shopId ?? '',
     accountId: party.person.id,
+    invitedByAccountId: lead.person.id,
     partyId: party.partyId,
     leadPartyId: lead.partyId,
     leadShopId: lead.shopId ?? '',
   };
+  await putConsumables(app, target);
+  return target;
 }
 
 /** Two commissions, everyone who could ask, and a full set of records for each target. */
@@ -213,7 +171,10 @@ export async function makeAuthorizationWorld(app: TestApp): Promise<Authorizatio
   const kit = await makeCommissionKit(app);
   const elsewhere = await makeCommissionKit(app);
   const bookkeeper = await makeMember(app, { id: kit.lead.shopId ?? '' }, 'bookkeeper');
+  const leadHand = await makeMember(app, { id: kit.lead.shopId ?? '' }, 'hand');
+  const makerHand = await makeMember(app, { id: kit.maker.shopId ?? '' }, 'hand');
   const guest = await makeAccount(app);
+  const expiredGuest = await makeAccount(app);
   await manager.insert(Party, {
     commissionId: kit.commissionId,
     roles: ['guest'],
@@ -227,7 +188,7 @@ export async function makeAuthorizationWorld(app: TestApp): Promise<Authorizatio
     commissionId: kit.commissionId,
     roles: ['guest'],
     shopId: null,
-    accountId: (await makeAccount(app)).id,
+    accountId: expiredGuest.id,
     guestSees: ['standing'],
     seesUntil: '2020-01-01',
   });
@@ -244,24 +205,30 @@ export async function makeAuthorizationWorld(app: TestApp): Promise<Authorizatio
   await refreshCommissionNames(manager, kit.commissionId);
   const people = {
     lead: kit.lead.person,
+    leadHand,
     bookkeeper,
     maker: kit.maker.person,
+    makerHand,
     finisher: kit.finisher.person,
     client: kit.client.person,
     guest,
     removed: removedPerson,
+    expiredGuest,
     outsider: elsewhere.lead.person,
     steward,
   };
   const clients: AuthorizationWorld['clients'] = {
     anonymous: new TestClient(app),
     lead: kit.lead.client,
+    leadHand: await signedInAs(app, leadHand),
     bookkeeper: await signedInAs(app, bookkeeper),
     maker: kit.maker.client,
+    makerHand: await signedInAs(app, makerHand),
     finisher: kit.finisher.client,
     client: kit.client.client,
     guest: await signedInAs(app, guest),
     removed: await signedInAs(app, removedPerson),
+    expiredGuest: await signedInAs(app, expiredGuest),
     outsider: elsewhere.lead.client,
     steward: await signedInAs(app, steward),
   };
