@@ -31,7 +31,7 @@ const unknown = asked.filter((name) => !(name in MEASUREMENTS));
 const databaseUrl = process.env['DATABASE_URL'];
 if (unknown.length > 0 || !databaseUrl) {
   say(`Usage: npm run bench -- [${Object.keys(MEASUREMENTS).join('] [')}]`);
-  say('BENCH_ROUNDS: pairs of slices (8); BENCH_SLICE_S: seconds of a slice (1)');
+  say('BENCH_ROUNDS: pairs of slices (8); BENCH_SLICE_S: seconds of a slice (2)');
   process.exit(2);
 }
 
@@ -48,7 +48,7 @@ const bench: Bench = {
   db,
   data: () => (filled ??= fillDatabase(client)),
   rounds: Number(process.env['BENCH_ROUNDS'] ?? 8),
-  sliceSeconds: Number(process.env['BENCH_SLICE_S'] ?? 1),
+  sliceSeconds: Number(process.env['BENCH_SLICE_S'] ?? 2),
 };
 
 const { rows } = await client.query<{ server_version: string }>('SHOW server_version');

@@ -8,7 +8,7 @@ export async function markThreadRead(
   ctx: RequestContext,
   { params, body }: ParsedInput<typeof contract>,
 ): Promise<void> {
-  const thread = await loadThread(ctx.manager, ctx.ability, params.commissionId, params.threadId);
+  const thread = await loadThread(ctx.db, ctx.ability, params.commissionId, params.threadId);
   await ctx.manager.query(
     `INSERT INTO "thread_mark" ("thread_id", "account_id", "read_sequence") VALUES ($1, $2, $3)
      ON CONFLICT ("thread_id", "account_id") DO UPDATE SET "read_sequence" = GREATEST("thread_mark"."read_sequence", EXCLUDED."read_sequence")`,

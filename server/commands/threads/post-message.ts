@@ -8,7 +8,7 @@ import type { RequestContext } from '../../http/context.ts';
 import { actingParty } from '../../policies/acting-party.ts';
 import { authorize } from '../../policies/authorize.ts';
 import { loadMessage } from '../../queries/threads/list-messages.ts';
-import { Thread } from '../../entities/thread.ts';
+import { findThread, type ThreadFacts } from '../../queries/threads/load-thread.ts';
 import { readersOf } from '../../queries/threads/thread-readers.ts';
 
 /**
@@ -31,7 +31,7 @@ const POST_SQL = `
     'audience', jsonb_build_object('to', 'thread', 'threadId', posted."thread_id"))
   FROM posted, fresh RETURNING ("payload"->'event'->>'sequence')::int AS sequence`;
 
-async function guardMentions(ctx: RequestContext, thread: Thread, accountIds: readonly string[]): Promise<void> {
+async function guardMentions(ctx: RequestContext, thread: ThreadFacts, accountIds: readonly string[]): Promise<void> {
   if (accountIds.length === 0) return;
   const readers = await readersOf(ctx.manager, thread.id);
   const errors = accountIds.flatMap((id, index) =>
@@ -48,7 +48,7 @@ async function guardMentions(ctx: RequestContext, thread: Thread, accountIds: re
 }
 
 /** A message takes along files that its own writer put into this thread. */
-async function guardFiles(ctx: RequestContext, thread: Thread, fileIds: readonly string[]): Promise<void> {
+async function guardFiles(ctx: RequestContext, thread: ThreadFacts, fileIds: readonly string[]): Promise<void> {
   for (const [index, id] of fileIds.entries()) {
     const ours = await ctx.manager.countBy(StoredFile, {
       id,
@@ -74,7 +74,7 @@ export async function postMessage(
   { params, body }: ParsedInput<typeof contract>,
 ): Promise<MessageView> {
   const { commissionId, threadId } = params;
-  const thread = await ctx.manager.findOneBy(Thread, { id: threadId, commissionId });
+  const thread = await findThread(ctx.db, commissionId, threadId);
   authorize(ctx.ability, 'post', 'Thread', thread);
   await guardMentions(ctx, thread, body.mentionedAccountIds);
   await guardFiles(ctx, thread, body.fileIds);

@@ -59,7 +59,7 @@ export async function listMessages(
   ctx: RequestContext,
   { params, query }: ParsedInput<typeof contract>,
 ): Promise<RouteOutput<typeof contract>> {
-  const thread = await loadThread(ctx.manager, ctx.ability, params.commissionId, params.threadId);
+  const thread = await loadThread(ctx.db, ctx.ability, params.commissionId, params.threadId);
   const { rows } = await poolOf(ctx.db).query<MessageRow>(messagesStatement(thread.id, query));
   // The row of the thread was read first: a message stored in between may be in the page already.
   const last = Math.max(thread.lastSequence, rows.at(-1)?.sequence ?? 0);

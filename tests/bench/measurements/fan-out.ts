@@ -1,4 +1,5 @@
 import { once } from 'node:events';
+import { setTimeout as pause } from 'node:timers/promises';
 import type { Measurement } from '../support/bench.ts';
 import { pairedRatio, verdictOf } from '../support/paired.ts';
 import { startApplication, startBare, type Running } from '../support/processes.ts';
@@ -7,6 +8,9 @@ import { openSockets, type SocketClients } from '../support/socket-clients.ts';
 import type { Order } from '../bare/orders.ts';
 
 const SOCKETS = 500;
+const WARM_SOCKETS = 200;
+/** By then the server has let go of those that left. */
+const LEAVE_MS = 1000;
 const EVENT = 'thread.message-added';
 /** Events of one slice; at some 20,000 deliveries a second this is one to two seconds. */
 const EVENTS_A_SLICE = 60;
@@ -27,9 +31,10 @@ interface Side {
 }
 
 async function connect(running: Running, headers: Readonly<Record<string, string>>): Promise<Side> {
-  // The first socket loads what all of them share.
-  const warm = await openSockets(running.origin, 2, EVENT, headers);
+  // The first sockets load and compile what all of them share.
+  const warm = await openSockets(running.origin, WARM_SOCKETS, EVENT, headers);
   await warm.stop();
+  await pause(LEAVE_MS);
   const before = await order(running, { order: 'memory' });
   const clients = await openSockets(running.origin, SOCKETS, EVENT, headers);
   const bytesPerSocket = ((await order(running, { order: 'memory' })) - before) / SOCKETS;
