@@ -1,18 +1,16 @@
-import { useQueryClient, useSuspenseQuery } from '@tanstack/react-query';
-import { Suspense, useEffect, useRef, useSyncExternalStore } from 'react';
-import { Form, Link, NavLink, Outlet, useLocation, useNavigate, useSearchParams } from 'react-router-dom';
-import { signOut } from '../../shared/contracts/accounts.ts';
+import { useSuspenseQuery } from '@tanstack/react-query';
+import { lazy, Suspense, useEffect, useRef, useState, useSyncExternalStore } from 'react';
+import { Form, Link, NavLink, Outlet, useLocation, useSearchParams } from 'react-router-dom';
 import { BrandMark } from '../components/ui/brand-mark.tsx';
-import { Menu, MenuChoices, MenuItem, MenuSeparator } from '../components/ui/menu.tsx';
 import { Notice } from '../components/ui/notice.tsx';
 import { Skeleton } from '../components/ui/skeleton.tsx';
 import { SkipLink, stripLinkClass, TopStrip } from '../components/ui/top-strip.tsx';
-import { api } from '../lib/api.ts';
 import { benchQuery } from '../lib/queries/commissions.ts';
 import { meQuery } from '../lib/queries/me.ts';
-import { closeRealtime, connectionState, openRealtime } from '../lib/socket.ts';
-import { chooseTheme, chosenTheme, THEMES } from '../lib/theme.ts';
-import { useState } from 'react';
+import { connectionState, openRealtime } from '../lib/socket.ts';
+
+/** The menu brings its library with it, after the page itself is there. */
+const PersonMenu = lazy(() => import('./person-menu.tsx').then((module) => ({ default: module.PersonMenu })));
 
 /** "Not connected" is said only when it lasts: a page that has just opened is still connecting. */
 const PATIENCE_MS = 4000;
@@ -29,57 +27,6 @@ function ConnectionLine() {
       Not connected. What you write is kept, and sent when you try again after the connection is back.
     </Notice>
   ) : null;
-}
-
-function PersonMenu() {
-  const { data: me } = useSuspenseQuery(meQuery());
-  const navigate = useNavigate();
-  const queryClient = useQueryClient();
-  const [theme, setTheme] = useState(chosenTheme());
-  const leave = async (): Promise<void> => {
-    await api(signOut, {});
-    closeRealtime();
-    queryClient.clear();
-    await navigate('/sign-in');
-  };
-  return (
-    <Menu
-      trigger={
-        <button type="button" className={stripLinkClass(false)}>
-          {me.displayName}
-        </button>
-      }
-    >
-      <MenuItem asChild>
-        <Link to="/account">Account</Link>
-      </MenuItem>
-      {me.shops.map((shop) => (
-        <MenuItem key={shop.shopId} asChild>
-          <Link to={`/shops/${shop.shopId}`}>{shop.name}</Link>
-        </MenuItem>
-      ))}
-      {me.isSteward && (
-        <MenuItem asChild>
-          <Link to="/shops">All shops</Link>
-        </MenuItem>
-      )}
-      <MenuItem asChild>
-        <Link to="/api-reference">API reference</Link>
-      </MenuItem>
-      <MenuSeparator />
-      <MenuChoices
-        label="Light"
-        value={theme}
-        options={THEMES}
-        onChoose={(next) => {
-          chooseTheme(next);
-          setTheme(next);
-        }}
-      />
-      <MenuSeparator />
-      <MenuItem onSelect={() => void leave()}>Sign out</MenuItem>
-    </Menu>
-  );
 }
 
 function Search() {
@@ -164,7 +111,11 @@ function Frame() {
             <Unread />
           </Suspense>
         }
-        person={<PersonMenu />}
+        person={
+          <Suspense fallback={<span className={stripLinkClass(false)}>{me.displayName}</span>}>
+            <PersonMenu />
+          </Suspense>
+        }
       />
       <ConnectionLine />
       <Suspense
