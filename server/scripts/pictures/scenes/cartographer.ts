@@ -14,11 +14,11 @@ const LYING = CARTOGRAPHER_RADIUS_MM;
 
 export const CARTOGRAPHER_PICTURES: readonly Picture[] = [
   picture('cartographer-cover.jpg', () => ({
-    camera: shot([2, 8, 0], { turnDeg: -10, upDeg: 33, distance: 375, fieldDeg: 43, openingMm: 4, focus: [0, 28, 18] }),
+    camera: shot([6, 8, 0], { turnDeg: -10, upDeg: 33, distance: 400, fieldDeg: 43, openingMm: 4, focus: [0, 28, 18] }),
     bench: leather({ tone: [0.17, 0.1, 0.055], seed: 39 }),
     light: windowLight(-52, 1.1),
     solids: cartographer(frameAlong([-92, LYING, -32], [1, 0, 0.3], 60)),
-    film: film({ exposure: 1.1 }),
+    film: film({ exposure: 1.35 }),
   })),
   picture('cartographer-drawing.jpg', async () => ({
     camera: shot([2, 0, 2], { turnDeg: 7, upDeg: 68, distance: 312, fieldDeg: 48, openingMm: 1.2, rollDeg: -2 }),
