@@ -1,5 +1,6 @@
 import type { EntityManager } from 'typeorm';
 import { limitsFor } from '../../../shared/engines/fit/limits.ts';
+import type { ProblemError } from '../../../shared/problems/problems.ts';
 import { InputInvalid } from '../../errors.ts';
 import { requireParties } from '../../queries/parties/load-party.ts';
 import { requireParts } from '../../queries/parts/load-part.ts';
@@ -25,6 +26,20 @@ const unreadable = (classText: string, nominalMm: number): boolean => {
   }
 };
 
+/** ISO 286-1 writes classes of holes with capitals and those of shafts with small letters: h8 is no class of a hole. */
+function classErrors(joint: JointFacts, field: 'holeClass' | 'shaftClass'): ProblemError[] {
+  const classText = joint[field];
+  if (!classText) return [];
+  const pointer = `/body/${field}`;
+  if (field === 'holeClass' && classText !== classText.toUpperCase())
+    return [{ pointer, message: 'The outer part takes a class in capitals, such as H8' }];
+  if (field === 'shaftClass' && classText !== classText.toLowerCase())
+    return [{ pointer, message: 'The inner part takes a class in small letters, such as f7' }];
+  return unreadable(classText, joint.nominalMm)
+    ? [{ pointer, message: `ISO 286 has no ${classText} at ${joint.nominalMm} mm in the tables carried here` }]
+    : [];
+}
+
 /** What no schema can see of a joint: its parts and parties are here, the range is in order, and the classes exist. */
 export async function checkJoint(manager: EntityManager, commissionId: string, joint: JointFacts): Promise<void> {
   await requireParts(manager, commissionId, [
@@ -35,17 +50,7 @@ export async function checkJoint(manager: EntityManager, commissionId: string, j
     ['/body/holePartyId', joint.holePartyId],
     ['/body/shaftPartyId', joint.shaftPartyId],
   ]);
-  const errors = (['holeClass', 'shaftClass'] as const).flatMap((field) => {
-    const classText = joint[field];
-    return classText && unreadable(classText, joint.nominalMm)
-      ? [
-          {
-            pointer: `/body/${field}`,
-            message: `ISO 286 has no ${classText} at ${joint.nominalMm} mm in the tables carried here`,
-          },
-        ]
-      : [];
-  });
+  const errors = [...classErrors(joint, 'holeClass'), ...classErrors(joint, 'shaftClass')];
   if (joint.holePartId === joint.shaftPartId)
     errors.push({ pointer: '/body/shaftPartId', message: 'A joint is between two parts' });
   if (joint.clearanceMinUm > joint.clearanceMaxUm)

@@ -85,23 +85,22 @@ export async function loadReportDetail(
   commissionId: string,
   reportId: string,
 ): Promise<FitReportDetail> {
-  const [[report], notes, events] = await Promise.all([
-    manager.query<ReportRow[]>(reportsSql('f."id" = $2'), [commissionId, reportId]),
-    manager.query<NoteRow[]>(
-      `SELECT n."id", n."party_id" AS "partyId", n."state", n."method", n."cut_side" AS "cutSide", n."remove_on_diameter_um" AS "removeOnDiameterUm",
+  // One after another: acts ask this inside their transaction, whose connection takes one statement at a time.
+  const [report] = await manager.query<ReportRow[]>(reportsSql('f."id" = $2'), [commissionId, reportId]);
+  const notes = await manager.query<NoteRow[]>(
+    `SELECT n."id", n."party_id" AS "partyId", n."state", n."method", n."cut_side" AS "cutSide", n."remove_on_diameter_um" AS "removeOnDiameterUm",
          n."over_length_mm" AS "overLengthMm", n."risk", n."shows", n."where_it_shows" AS "whereItShows", n."cost_minor" AS "costMinor", n."currency",
          n."cost_borne_by_party_id" AS "costBorneByPartyId", n."effect_days" AS "effectDays", n."consent_state" AS "consentState",
          n."consent_asked_at" AS "consentAskedAt", n."consent_answered_at" AS "consentAnsweredAt", n."consent_words" AS "consentWords",
          n."created_at" AS "createdAt", a."display_name" AS "authorName"
        FROM "rework_note" n JOIN "account" a ON a."id" = n."account_id" WHERE n."report_id" = $1 ORDER BY n."created_at", n."id"`,
-      [reportId],
-    ),
-    manager.query<EventRow[]>(
-      `SELECT e."id", e."act", e."from_state" AS "fromState", e."to_state" AS "toState", e."words", e."at", a."display_name" AS "by"
+    [reportId],
+  );
+  const events = await manager.query<EventRow[]>(
+    `SELECT e."id", e."act", e."from_state" AS "fromState", e."to_state" AS "toState", e."words", e."at", a."display_name" AS "by"
        FROM "report_event" e JOIN "account" a ON a."id" = e."account_id" WHERE e."report_id" = $1 ORDER BY e."at", e."id"`,
-      [reportId],
-    ),
-  ]);
+    [reportId],
+  );
   if (!report) throw new Error('A report that was just authorized is gone');
   return {
     report: presentReport(report),
