@@ -47,7 +47,7 @@ export function bandModel(input: BandInput, charactersAcross: number): BandModel
     const labels: WantedLabel[] = legs.flatMap((leg) => [
       { x: x(leg.startDay), strong: leg.shopName, plain: leg.work, tone: 'plain' as const },
       ...(leg.held
-        ? [{ x: x(leg.held.sinceDay), strong: `Held: ${leg.held.words}`, plain: '', tone: 'held' as const }]
+        ? [{ x: cutOf(leg, x) ?? 0, strong: `Held: ${leg.held.words}`, plain: '', tone: 'held' as const }]
         : []),
     ]);
     if (input.expected && !input.deliveredOn && index === fadeRow)
@@ -66,7 +66,7 @@ export function bandModel(input: BandInput, charactersAcross: number): BandModel
         x0: x(leg.startDay),
         x1: x(addDays(leg.endDay, 1)),
         state: leg.state,
-        cutX: leg.held ? Math.min(Math.max(x(leg.held.sinceDay), x(leg.startDay)), x(addDays(leg.endDay, 1))) : null,
+        cutX: cutOf(leg, x),
       })),
       rods: legs.slice(1).flatMap((leg, at) => {
         const before = legs[at];
@@ -106,6 +106,10 @@ export function bandModel(input: BandInput, charactersAcross: number): BandModel
     steps: stepsOf(input, legById),
   };
 }
+
+/** The saw cut goes through the tube also where a leg is held since before it begins. */
+const cutOf = (leg: BandLeg, x: (day: IsoDay) => number): number | null =>
+  leg.held ? Math.min(Math.max(x(leg.held.sinceDay), x(leg.startDay)), x(addDays(leg.endDay, 1))) : null;
 
 /** The row the delivery fades out of: that of the last leg. */
 function mainRow(input: BandInput, rowOf: ReadonlyMap<string, number>): number {
