@@ -7,7 +7,7 @@ import { Commission } from '../../entities/commission.ts';
 import { HandoffOffer } from '../../entities/handoff-offer.ts';
 import { Part } from '../../entities/part.ts';
 import { Party } from '../../entities/party.ts';
-import { InputInvalid, NotInThisState } from '../../errors.ts';
+import { InputInvalid, NotFound, NotInThisState } from '../../errors.ts';
 import type { RequestContext } from '../../http/context.ts';
 import { authorize } from '../../policies/authorize.ts';
 import { partyNames } from '../../queries/parties/load-party.ts';
@@ -18,8 +18,12 @@ import { guardHandoff, lockHandoff } from './handoff-days.ts';
 export const completeHandoff = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<string> =>
   inTransaction(ctx, async (uow) => {
     const { commissionId, handoffId } = params;
+    // Custody changes one at a time with parties leaving, so that no part is left with one who is gone.
+    await uow.manager.findOne(Commission, { where: { id: commissionId }, lock: { mode: 'pessimistic_write' } });
     const handoff = await lockHandoff(uow.manager, commissionId, handoffId);
     authorize(ctx.ability, 'receive', 'Handoff', handoff);
+    const receiver = await uow.manager.findOneByOrFail(Party, { id: handoff.toPartyId });
+    if (receiver.leftAt) throw new NotFound();
     await guardHandoff(ctx, uow.manager, handoff, body.revision);
     if (handoff.doneOn) throw new NotInThisState('These parts were received already.');
     if (body.onDay > ctx.todayIso)
@@ -46,7 +50,6 @@ export const completeHandoff = (ctx: RequestContext, { params, body }: ParsedInp
     handoff.doneOn = body.onDay;
     handoff.revision += 1;
     await uow.manager.save(handoff);
-    const receiver = await uow.manager.findOneByOrFail(Party, { id: handoff.toPartyId });
     if (receiver.roles.includes('client'))
       await uow.manager.update(
         Commission,

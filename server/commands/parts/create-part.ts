@@ -1,6 +1,7 @@
 import type { createPart as contract } from '../../../shared/contracts/parts-and-legs.ts';
 import type { ParsedInput } from '../../../shared/contracts/route.ts';
 import { inTransaction } from '../../db/unit-of-work.ts';
+import { Commission } from '../../entities/commission.ts';
 import { Part } from '../../entities/part.ts';
 import type { RequestContext } from '../../http/context.ts';
 import { authorizeCreate } from '../../policies/authorize.ts';
@@ -10,6 +11,8 @@ export const createPart = (ctx: RequestContext, { params, body }: ParsedInput<ty
   inTransaction(ctx, async (uow) => {
     const { commissionId } = params;
     authorizeCreate(ctx.ability, 'Part', { commissionId });
+    // Custody changes one at a time with parties leaving, so that no part is left with one who is gone.
+    await uow.manager.findOne(Commission, { where: { id: commissionId }, lock: { mode: 'pessimistic_write' } });
     await requireParties(uow.manager, commissionId, [['/body/holderPartyId', body.holderPartyId]]);
     const position = await uow.manager.countBy(Part, { commissionId });
     const row = await uow.manager.save(

@@ -1,6 +1,7 @@
 import type { updatePart as contract } from '../../../shared/contracts/parts-and-legs.ts';
 import type { ParsedInput } from '../../../shared/contracts/route.ts';
 import { inTransaction } from '../../db/unit-of-work.ts';
+import { Commission } from '../../entities/commission.ts';
 import { Part } from '../../entities/part.ts';
 import type { RequestContext } from '../../http/context.ts';
 import { authorize } from '../../policies/authorize.ts';
@@ -11,6 +12,8 @@ import { given, guardRevision } from '../revision.ts';
 export const updatePart = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<Part> =>
   inTransaction(ctx, async (uow) => {
     const { commissionId, partId } = params;
+    // As in createPart: custody changes one at a time with parties leaving.
+    await uow.manager.findOne(Commission, { where: { id: commissionId }, lock: { mode: 'pessimistic_write' } });
     const row = await uow.manager.findOne(Part, {
       where: { id: partId, commissionId },
       lock: { mode: 'pessimistic_write' },
