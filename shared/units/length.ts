@@ -47,8 +47,11 @@ export function parseLength(typed: string, unitHint: LengthUnit = 'mm'): LengthR
   return positive(unit === 'mm' ? value : value * MM_PER_INCH, unit);
 }
 
-const positive = (valueMm: number, unit: LengthUnit): LengthReading =>
-  valueMm > 0 ? { ok: true, valueMm, unit } : refuse('not-positive', 'A length is above zero');
+const positive = (valueMm: number, unit: LengthUnit): LengthReading => {
+  if (!Number.isFinite(valueMm))
+    return refuse('unreadable', 'That is too long to be a length; write 31.95, 1.258 in or 1 17/64');
+  return valueMm > 0 ? { ok: true, valueMm, unit } : refuse('not-positive', 'A length is above zero');
+};
 
 /**
  * True when a reading is so far from the nominal size that a unit was mixed up (inch for mm, um for mm): more than twice

@@ -24,7 +24,7 @@ function stepOf(nominalMm: number, steps: readonly number[]): number {
 }
 
 /**
- * Standard tolerance of a grade, IT5 to IT13 (ISO 286-1:2010, table 1), micrometres.
+ * Standard tolerance of a grade, IT4 to IT13 (ISO 286-1:2010, table 1), micrometres.
  * @throws EngineInputError outside the table
  */
 export function standardToleranceUm(nominalMm: number, grade: number): number {
@@ -32,13 +32,13 @@ export function standardToleranceUm(nominalMm: number, grade: number): number {
   if (grade === 4) return IT4_UM[step] ?? NaN;
   const tolerance = STANDARD_TOLERANCES_UM[step]?.[grade - FIRST_GRADE];
   if (tolerance === undefined)
-    throw new EngineInputError('grade', `Grades IT${FIRST_GRADE} to IT${LAST_GRADE} are carried; IT${grade} is not`);
+    throw new EngineInputError('grade', `Grades IT4 to IT${LAST_GRADE} are carried; IT${grade} is not`);
   return tolerance;
 }
 
 /**
- * Limits of a tolerance class at a nominal size (ISO 286-1:2010, tables 2 to 5): holes `D` to `S`, shafts `d` to `s`,
- * `JS`/`js`. Holes follow from shafts: EI = −es for D to H; for K to N up to IT8 and P to S up to IT7 above 3 mm,
+ * Limits of a tolerance class at a nominal size (ISO 286-1:2010, tables 2 to 5): holes `C` to `S`, shafts `c` to `s`,
+ * `JS`/`js`. Holes follow from shafts: EI = −es for C to H; for K to N up to IT8 and P to S up to IT7 above 3 mm,
  * ES = −ei + Δ with Δ = ITn − IT(n−1); otherwise ES = −ei, and N of IT9 and coarser has ES = 0.
  *
  * @param toleranceClass for instance `H8` or `f7`
@@ -56,7 +56,7 @@ export function limitsFor(toleranceClass: string, nominalMm: number): Limits {
   if (lower === 'js') return { upperUm: widthUm / 2, lowerUm: -widthUm / 2 };
   const table = SHAFT_DEVIATIONS_UM[lower];
   if (!table)
-    throw new EngineInputError('toleranceClass', `${toleranceClass} is not among the classes carried (D to S, d to s)`);
+    throw new EngineInputError('toleranceClass', `${toleranceClass} is not among the classes carried (C to S, c to s)`);
   const tabled = table[stepOf(nominalMm, DEVIATION_STEPS_MM)] ?? NaN;
   return isHole ? holeLimits(lower, grade, nominalMm, tabled, widthUm) : shaftLimits(lower, grade, tabled, widthUm);
 }

@@ -1,9 +1,9 @@
 import fc from 'fast-check';
 import { unit } from 'mathjs';
 import { describe, expect, it } from 'vitest';
-import { MINOR_DIGITS } from '../../../shared/units/money.ts';
 import {
   formatLength,
+  formatMm,
   formatUm,
   looksLikeUnitMixUp,
   MM_PER_INCH,
@@ -55,6 +55,11 @@ describe('typed lengths', () => {
     ['-3', 'not-positive'],
     ['0', 'not-positive'],
     ['1/0', 'zero-denominator'],
+    ['9'.repeat(400), 'unreadable'],
+    [`${'9'.repeat(400)}/${'9'.repeat(400)}`, 'unreadable'],
+    ['1.234,5', 'ambiguous'],
+    ['1e3', 'unreadable'],
+    ['31.957 cm', 'unreadable'],
     ['3/4 mm', 'unreadable'],
   ])('%j is refused: %s', (typed, reason) => expect(valueOf(typed)).toBe(reason));
 
@@ -71,7 +76,25 @@ describe('shown lengths', () => {
   it("say a fraction's error when it is not exact", () => {
     expect(formatLength(22.225, 'inch-fraction')).toBe('7/8 in');
     expect(formatLength(32, 'inch-fraction')).toMatch(/^1 17\/64 in − \d+ µm$/);
+  });
+
+  it('carry their digits, and a minus sign only where something is left to be minus', () => {
     expect(formatUm(-43)).toBe('−43 µm');
+    expect(formatUm(-0.4)).toBe('0 µm');
+    expect(formatMm(-0.043)).toBe('−0.043 mm');
+    expect(formatMm(32)).toBe('32.000 mm');
+    expect(formatMm(-0.0004)).toBe('0.000 mm');
+    expect(formatLength(31.958_28, 'inch')).toBe('1.2582 in');
+  });
+
+  it('are read again as what they show', () => {
+    fc.assert(
+      fc.property(fc.integer({ min: 1, max: 400_000 }), (um) => {
+        expect(parseLength(formatMm(um / 1000))).toEqual({ ok: true, valueMm: um / 1000, unit: 'mm' });
+        const asFraction = parseLength(nearestFraction(um / 1000 + 0.3).text);
+        expect(asFraction.ok && Math.abs(asFraction.valueMm - um / 1000 - 0.3)).toBeLessThanOrEqual(0.1985);
+      }),
+    );
   });
 
   it('the nearest 64th is never further than half a step', () => {
@@ -82,5 +105,3 @@ describe('shown lengths', () => {
     );
   });
 });
-
-it('minor units are those of ISO 4217', () => expect(MINOR_DIGITS).toEqual({ EUR: 2, USD: 2, GBP: 2, JPY: 0, KWD: 3 }));
