@@ -1,37 +1,50 @@
 import { hashKey, type QueryClient, type QueryKey } from '@tanstack/react-query';
 import { REALTIME_EVENTS, type RealtimeEvents, type RealtimeName } from '../../shared/realtime/events.ts';
 import { keys } from '../lib/query-keys.ts';
-import { onConnected, onRealtime } from '../lib/socket.ts';
+import { onConnected, onRealtime, onSessionEnded } from '../lib/socket.ts';
+
+/** An act that leaves a line in what happened also moves something on the bench. */
+const moved = (commissionId: string): readonly QueryKey[] => [keys.history.list(commissionId), keys.bench()];
 
 type Invalidations = { [N in RealtimeName]: (event: RealtimeEvents[N]) => readonly QueryKey[] };
 
 /** Which queries each event makes stale. An event without a line here does not compile. */
 export const INVALIDATIONS: Invalidations = {
-  'commission.changed': ({ commissionId }) => [keys.commissions.detail(commissionId), keys.commissions.lists()],
+  'commission.changed': ({ commissionId }) => [
+    keys.commissions.detail(commissionId),
+    keys.commissions.lists(),
+    ...moved(commissionId),
+  ],
   'parties.changed': ({ commissionId }) => [
     keys.parties.list(commissionId),
     keys.commissions.detail(commissionId),
     keys.commissions.lists(),
+    ...moved(commissionId),
   ],
-  'parts.changed': ({ commissionId }) => [keys.parts.list(commissionId)],
-  'legs.changed': ({ commissionId }) => [keys.legs.list(commissionId), keys.history.list(commissionId), keys.bench()],
+  'parts.changed': ({ commissionId }) => [keys.parts.list(commissionId), ...moved(commissionId)],
+  // What an offered day does to the client's day is computed from the legs: such previews lie below the handoffs.
+  'legs.changed': ({ commissionId }) => [
+    keys.legs.list(commissionId),
+    keys.handoffs.details(commissionId),
+    ...moved(commissionId),
+  ],
   'joint.changed': ({ commissionId, jointId }) => [
     keys.joints.lists(commissionId),
     keys.joints.detail(commissionId, jointId),
+    ...moved(commissionId),
   ],
   'fit-report.changed': ({ commissionId, reportId, jointId }) => [
     keys.fitReports.lists(commissionId),
     keys.fitReports.detail(commissionId, reportId),
     keys.joints.lists(commissionId),
     keys.joints.detail(commissionId, jointId),
-    keys.bench(),
+    ...moved(commissionId),
   ],
-  'consent.changed': ({ commissionId }) => [keys.consents.list(commissionId), keys.bench()],
+  'consent.changed': ({ commissionId }) => [keys.consents.list(commissionId), ...moved(commissionId)],
   'handoff.changed': ({ commissionId, handoffId }) => [
     keys.handoffs.lists(commissionId),
     keys.handoffs.detail(commissionId, handoffId),
-    keys.history.list(commissionId),
-    keys.bench(),
+    ...moved(commissionId),
   ],
   'standing.changed': ({ commissionId }) => [keys.standing.detail(commissionId), keys.commissions.lists()],
   'thread.opened': ({ commissionId }) => [keys.threads.lists(commissionId)],
@@ -67,6 +80,11 @@ export function createBatch(
   };
 }
 
+const LIVE = new Set<unknown>(['me', 'bench', 'commission', 'commissions']);
+
+/** What events speak of: the reader's own rights, the bench, and commissions but for their messages. */
+const isLive = (queryKey: QueryKey): boolean => LIVE.has(queryKey[0]) && !queryKey.includes('messages');
+
 /** Ties the server's events to the query cache for as long as the page lives. */
 export function followRealtime(queryClient: QueryClient): void {
   const add = createBatch(queryClient);
@@ -74,10 +92,11 @@ export function followRealtime(queryClient: QueryClient): void {
     onRealtime(name, (event) => add(INVALIDATIONS[name](event)));
   };
   for (const name of Object.keys(REALTIME_EVENTS) as RealtimeName[]) follow(name);
-  let first = true;
-  // Events are sent at most once: after a break everything on the page is asked for again. Threads ask by sequence.
+  // Events are sent at most once, and none comes before the connection stands: at each connect, the first one too, what
+  // the page shows is asked for again. Threads ask by sequence.
   onConnected(() => {
-    if (!first) void queryClient.invalidateQueries({ predicate: (query) => !query.queryKey.includes('messages') });
-    first = false;
+    void queryClient.invalidateQueries({ predicate: (query) => isLive(query.queryKey) });
   });
+  // Asked who we are, the API answers that nobody is signed in, and the page goes where that leads.
+  onSessionEnded(() => void queryClient.invalidateQueries({ queryKey: keys.me() }));
 }

@@ -16,13 +16,20 @@ const events = new Map<RealtimeName, Set<Listener<never>>>();
 const connected = new Set<() => void>();
 const states = new Set<Listener<boolean>>();
 const presence = new Set<Listener<ThreadPresence>>();
+const refused = new Set<() => void>();
 let socket: Socket | null = null;
 let isUp = false;
+
+/** Waits before connecting again where the library does not do it, in milliseconds; spread, so that not all come at once. */
+const AFTER_CUT_MS = { least: 300, most: 1200 };
+const AFTER_REFUSAL_MS = { least: 2000, most: 8000 };
 
 const setUp = (up: boolean): void => {
   isUp = up;
   for (const listener of states) listener(up);
 };
+
+const spread = ({ least, most }: typeof AFTER_CUT_MS): number => least + Math.random() * (most - least);
 
 /** Opens the one connection of this page; the library is loaded only then. Calling again does nothing. */
 export async function openRealtime(): Promise<void> {
@@ -37,16 +44,28 @@ export async function openRealtime(): Promise<void> {
     randomizationFactor: 0.6,
   });
   socket = made;
+  const again = (wait: typeof AFTER_CUT_MS): void => {
+    setTimeout(() => {
+      if (socket === made) made.connect();
+    }, spread(wait));
+  };
   made.on('connect', () => {
     setUp(true);
     for (const listener of connected) listener();
   });
   made.on('disconnect', (reason) => {
     setUp(false);
-    // The server cuts connections whose rights changed; the library does not come back from that by itself.
-    if (reason === 'io server disconnect') made.connect();
+    // The server cuts connections whose rights changed; the library does not come back from that by itself. The short
+    // wait lets the answer of the act that cut us arrive first, with the session that takes the old one's place.
+    if (reason === 'io server disconnect') again(AFTER_CUT_MS);
   });
-  made.on('connect_error', () => setUp(false));
+  made.on('connect_error', (error) => {
+    setUp(false);
+    // While it is active the library tries again by itself; it gives up where the server answered with a refusal.
+    if (made.active) return;
+    if (error.message === 'not-signed-in') for (const listener of refused) listener();
+    again(AFTER_REFUSAL_MS);
+  });
   made.onAny((name: string, payload: unknown) => {
     if (name === PRESENCE_EVENT) for (const listener of presence) listener(payload as ThreadPresence);
     else if (name in REALTIME_EVENTS)
@@ -74,6 +93,9 @@ export function onRealtime<N extends RealtimeName>(name: N, listener: Listener<R
 
 /** Called at each connect: what happened in between was not heard and has to be asked for. */
 export const onConnected = (listener: () => void): (() => void) => subscribe(connected, listener);
+
+/** Called when the server knows nobody behind this connection any more: the session ended, here or elsewhere. */
+export const onSessionEnded = (listener: () => void): (() => void) => subscribe(refused, listener);
 
 export const onPresence = (listener: Listener<ThreadPresence>): (() => void) => subscribe(presence, listener);
 
