@@ -21,8 +21,9 @@ interface Step {
 }
 
 /**
- * A fit report's states. An answer can be given anew until work starts; a verification that fails opens the report again
- * for another answer. `agreed` with a rework that shows waits for the client's consent, which `start-rework` asks for.
+ * A fit report's states. An answer can be given anew until it is agreed, and after the client refused what would show; a
+ * verification that fails opens the report again for another answer. `agreed` with a rework that shows waits for the
+ * client's consent, which `start-rework` asks for.
  */
 export const REPORT_STEPS: Readonly<Record<ReportAct, Step>> = {
   answer: { from: ['raised', 'answered'], to: 'answered', by: 'answerer' },
@@ -57,6 +58,9 @@ export type ReportAnswer = { ok: true; state: ReportState } | { ok: false; words
 /** What an act makes of a report, or why it cannot be done as things stand. */
 export function nextReportState(report: ReportFacts, act: ReportAct): ReportAnswer {
   const step = REPORT_STEPS[act];
+  // What the client refused can only be replaced, and the side that answers need not be asked to.
+  if (act === 'answer' && report.state === 'agreed' && report.shows && report.consent === 'refused')
+    return { ok: true, state: step.to };
   if (!step.from.includes(report.state))
     return { ok: false, words: `The report is ${REPORT_STATE_WORDS[report.state]}. Nothing was changed.` };
   if (act === 'start-rework' && report.shows && report.consent !== 'given')

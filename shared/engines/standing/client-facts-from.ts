@@ -18,7 +18,8 @@ function holdOf(reports: readonly Report[], legId: string): ClientLeg['held'] {
     .filter((report) => report.blocking && report.heldLegId === legId && isOpenReport(report.state))
     .sort(by((report) => report.raisedOn + report.id));
   if (!first) return null;
-  const note = first.note?.agreed ? first.note : null;
+  // A report that is open anew after a failed verification has no agreed rework any more; the old one says nothing of the next.
+  const note = first.note?.agreed && first.state !== 'raised' ? first.note : null;
   return {
     sinceDay: first.raisedOn,
     clientWords: first.clientWords || DEFAULT_HOLD_WORDS,

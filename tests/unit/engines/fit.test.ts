@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { EngineInputError } from '../../../shared/engines/engine-input-error.ts';
 import { assessClearance, resolutionUncertaintyUm } from '../../../shared/engines/fit/clearance.ts';
+import { HAND_FITS } from '../../../shared/engines/fit/hand-fits.ts';
 import { STANDARD_TOLERANCES_UM, SIZE_STEPS_MM } from '../../../shared/engines/fit/iso-tables.ts';
 import { fitOf, limitsFor, standardToleranceUm } from '../../../shared/engines/fit/limits.ts';
 import { removalFor } from '../../../shared/engines/fit/removal.ts';
@@ -159,6 +160,64 @@ describe('clearance and what comes off', () => {
         expect(removal.onDiameterUm).toBeGreaterThanOrEqual(0);
       }),
     );
+  });
+
+  it('the least and the most that may come off leave the worst pair at the ends of the agreed range', () => {
+    fc.assert(
+      fc.property(diameters, diameters, (holes, shafts) => {
+        const range = { clearanceMinUm: 50, clearanceMaxUm: 100 };
+        const at = (removedUm: number) =>
+          assessClearance({
+            hole: holes.map((one) => reading(one)),
+            shaft: shafts.map((one) => reading(one - removedUm / 1000)),
+            ...range,
+          });
+        const { leastOnDiameterUm, mostOnDiameterUm, onDiameterUm } = removalFor(at(0), range);
+        if (at(0).worstPairUm > range.clearanceMaxUm) {
+          // Too loose already: nothing that comes off helps.
+          expect([leastOnDiameterUm, onDiameterUm, mostOnDiameterUm]).toEqual([0, 0, 0]);
+          return;
+        }
+        expect(at(mostOnDiameterUm).worstPairUm).toBeCloseTo(range.clearanceMaxUm, 6);
+        if (leastOnDiameterUm > 0) expect(at(leastOnDiameterUm).worstPairUm).toBeCloseTo(range.clearanceMinUm, 6);
+        else expect(at(0).worstPairUm).toBeGreaterThanOrEqual(range.clearanceMinUm);
+        expect(onDiameterUm).toBeGreaterThanOrEqual(leastOnDiameterUm);
+        expect(onDiameterUm).toBeLessThanOrEqual(mostOnDiameterUm);
+      }),
+    );
+  });
+
+  it('says when the parts are further from round than the agreed range is wide', () => {
+    const range = { clearanceMinUm: 50, clearanceMaxUm: 100 };
+    const withSpread = (spreadMm: number) =>
+      removalFor(
+        assessClearance({ hole: [reading(32), reading(32 + spreadMm)], shaft: [reading(32.05)], ...range }),
+        range,
+      );
+    expect([withSpread(0.049).spreadTooWide, withSpread(0.051).spreadTooWide]).toEqual([false, true]);
+    // Worst pair at the middle, 75; the loosest is the spread further.
+    expect(withSpread(0.06).thenLoosestPairUm).toBeCloseTo(135, 6);
+  });
+
+  it('the coarsest gauge of a set speaks for it', () => {
+    const { hole } = assessClearance({
+      hole: [reading(30, 1), reading(30, 20)],
+      shaft: [reading(29.9)],
+      clearanceMinUm: 0,
+      clearanceMaxUm: 200,
+    });
+    expect(hole).toMatchObject({ count: 2, resolutionUm: 20, spreadUm: 0 });
+  });
+
+  // Common practice of the trade; 50 to 100 um is the range of the brief's own drawing.
+  it('hand fits are in order from loose to tight, and a hand slip is 50 to 100 um', () => {
+    expect(HAND_FITS.find((fit) => fit.name === 'hand slip')).toMatchObject({
+      clearanceMinUm: 50,
+      clearanceMaxUm: 100,
+    });
+    const middles = HAND_FITS.map((fit) => fit.clearanceMinUm + fit.clearanceMaxUm);
+    expect(middles).toEqual([...middles].sort((one, other) => other - one));
+    for (const fit of HAND_FITS) expect(fit.clearanceMinUm).toBeLessThan(fit.clearanceMaxUm);
   });
 
   it('a change of unit on the way changes no verdict', () => {

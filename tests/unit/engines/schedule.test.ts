@@ -138,6 +138,53 @@ describe('a plan in days', () => {
     expect(daysBetween(free?.toDay ?? '', held?.toDay ?? '')).toBeGreaterThan(0);
   });
 
+  it('what waited for a dropped leg waits for what that one waited for', () => {
+    const dropped = leg('b', 4, { afterLegIds: ['a'], state: 'dropped' });
+    const legs = [leg('a', 3), dropped, leg('c', 1, { afterLegIds: ['b'] })];
+    expect(plan(legs).legs.get('c')?.startOn).toBe('2026-03-05');
+    expect([...plan(legs).legs.keys()]).toEqual(['a', 'c']);
+  });
+
+  it('expects the delivery between the tenth and the ninetieth of a hundred cases, by the sum along the driving path', () => {
+    const wide = (id: string, after: string[]) =>
+      leg(id, 0, { afterLegIds: after, hopefulDays: 2, likelyDays: 5, badDays: 14 });
+    // Two legs of mean 6 and variance 4 (three-point formulas): mean 12, sigma the root of 8.
+    const { expected, meanDays, sigmaDays, path } = plan([wide('a', []), wide('b', ['a'])]);
+    expect([meanDays, path]).toEqual([12, ['a', 'b']]);
+    expect(sigmaDays).toBeCloseTo(Math.sqrt(8), 12);
+    // 12 - 1.2816 x 2.828 = 8.38 and 12 + 3.62 = 15.62: the 9th and the 16th working day from Monday 2 March.
+    expect(expected).toEqual({ fromDay: '2026-03-12', toDay: '2026-03-23' });
+  });
+
+  it('refuses legs that wait for each other, with the way round', () => {
+    const attempt = () => plan([leg('a', 1, { afterLegIds: ['b'] }), leg('b', 1, { afterLegIds: ['a'] })]);
+    expect(attempt).toThrow(expect.objectContaining({ path: ['a', 'b', 'a'] }) as Error);
+  });
+
+  it('starts no leg before those it waits for have ended, in any plan without loops', () => {
+    const someLegs = fc.array(
+      fc.record({ days: fc.integer({ min: 1, max: 12 }), after: fc.array(fc.nat(9), { maxLength: 3 }) }),
+      { minLength: 1, maxLength: 10 },
+    );
+    fc.assert(
+      fc.property(someLegs, (drawn) => {
+        // A leg waits only for earlier ones of the list, so that there is no loop.
+        const legs = drawn.map(({ days, after }, index) =>
+          leg(String(index), days, { afterLegIds: after.filter((before) => before < index).map(String) }),
+        );
+        const planned = plan(legs);
+        for (const { id, afterLegIds } of legs)
+          for (const before of afterLegIds)
+            expect((planned.legs.get(id)?.startOn ?? '') > (planned.legs.get(before)?.finishOn ?? '9999')).toBe(true);
+        const last = [...planned.legs.values()]
+          .map((one) => one.finishOn)
+          .sort()
+          .at(-1);
+        expect(planned.expected).toEqual({ fromDay: last, toDay: last });
+      }),
+    );
+  });
+
   it('an agreed day holds the next leg back, and the effect of another day is known before it is agreed', () => {
     const input: PlanInput = {
       legs: [leg('a', 2), leg('b', 1, { afterLegIds: ['a'] })],

@@ -126,6 +126,13 @@ describe('the headline', () => {
   ])('%s', (_case, changes, words) => expect(headline(changes)).toBe(words));
 });
 
+it('what was said of a rework that failed is not said of the next one', () => {
+  const reopened = report({ state: 'raised' }, { shows: false, consent: null });
+  expect(headline({ reports: [reopened], told: null, expected: null })).toBe(
+    'Held at Tinder Lane Electrics since Monday for a small correction: the end cap was too tight.',
+  );
+});
+
 it('says where each part is, what is agreed next, and who is waited for', () => {
   const standing = standingFor(
     clientFactsFrom(

@@ -2,7 +2,9 @@ import { describe, expect, it } from 'vitest';
 import { checkLegMove } from '../../../shared/engines/legs/leg-states.ts';
 import { checkOfferAct, type HandoffFacts } from '../../../shared/engines/handoffs/offer-rules.ts';
 import {
+  isOpenReport,
   nextReportState,
+  openReportActs,
   REPORT_STEPS,
   type ReportAct,
   type ReportState,
@@ -48,6 +50,35 @@ describe('a fit report', () => {
   ] as const)('that shows starts its rework with consent %s: %s', (consent, may) =>
     expect(nextReportState({ state: 'agreed', shows: true, consent }, 'start-rework').ok).toBe(may),
   );
+
+  it.each([
+    ['asked', false],
+    ['given', false],
+    [null, false],
+    ['refused', true],
+  ] as const)('that shows, is agreed and has consent %s takes another answer: %s', (consent, may) => {
+    const report = { state: 'agreed', shows: true, consent } as const;
+    expect(nextReportState(report, 'answer').ok).toBe(may);
+    expect(openReportActs(report).includes('answer')).toBe(may);
+  });
+
+  it('is open until it is closed or taken back', () => {
+    expect(STATES.filter(isOpenReport)).toEqual(['raised', 'answered', 'agreed', 'being-reworked', 'to-be-verified']);
+  });
+
+  it('can be brought to its end from every open state', () => {
+    const reach = (from: ReportState): Set<ReportState> => {
+      const reached = new Set<ReportState>([from]);
+      for (const state of reached)
+        for (const act of openReportActs({ state, shows: false, consent: null })) {
+          const answer = nextReportState({ state, shows: false, consent: null }, act);
+          if (answer.ok) reached.add(answer.state);
+        }
+      return reached;
+    };
+    for (const state of STATES.filter(isOpenReport)) expect(reach(state).has('closed')).toBe(true);
+    for (const state of ['closed', 'withdrawn'] as const) expect([...reach(state)]).toEqual([state]);
+  });
 });
 
 describe('a leg', () => {
