@@ -14,11 +14,13 @@ import { Shop } from './shop.ts';
   unique: true,
   where: '"left_at" IS NULL AND "account_id" IS NOT NULL',
 })
+@Index('party_shop_guest_idx', ['shopId'], { where: `'guest' = ANY("roles")` })
 @Check('party_is_shop_or_person', '("shop_id" IS NULL) <> ("account_id" IS NULL)')
 export class Party {
   @PrimaryGeneratedColumn('uuid')
   id!: string;
 
+  @Index('party_commission_idx')
   @ForeignKey(() => Commission)
   @Column({ type: 'uuid' })
   commissionId!: string;

@@ -1,4 +1,4 @@
-import { ServerResponse, type IncomingMessage } from 'node:http';
+import { IncomingMessage, ServerResponse } from 'node:http';
 import type { Request, RequestHandler, Response } from 'express';
 
 /**
@@ -7,9 +7,12 @@ import type { Request, RequestHandler, Response } from 'express';
  */
 export const handshakeAccountId = (session: RequestHandler, handshake: IncomingMessage): Promise<string | null> =>
   new Promise((resolve, reject) => {
-    const standIn = Object.create(handshake) as Request;
-    const nowhere = new ServerResponse(handshake) as unknown as Response;
-    void session(standIn, nowhere, (error?: unknown) =>
+    const copy = new IncomingMessage(handshake.socket);
+    copy.method = handshake.method ?? 'GET';
+    copy.url = handshake.url ?? '/';
+    copy.headers = handshake.headers;
+    const standIn = copy as Request;
+    void session(standIn, new ServerResponse(copy) as unknown as Response, (error?: unknown) =>
       error instanceof Error ? reject(error) : resolve(standIn.session.accountId ?? null),
     );
   });

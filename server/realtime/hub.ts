@@ -13,6 +13,7 @@ import { comesFromOwnOrigin } from '../http/middleware/same-origin.ts';
 import { keysOf, type EventAudience } from '../outbox/audience.ts';
 import type { OutgoingMessage } from '../outbox/relay.ts';
 import type { Services } from '../services.ts';
+import { forgetHandshakes } from './forget-handshake.ts';
 import { handshakeAccountId } from './handshake-session.ts';
 import { Presence } from './presence.ts';
 import { roomsOf, mayReadThread, personOf } from './socket-rights.ts';
@@ -32,6 +33,7 @@ export class Hub {
   readonly io: AppServer;
   readonly #services: Services;
   readonly #presence = new Presence();
+  readonly #forgetHandshake: ReturnType<typeof forgetHandshakes>;
 
   constructor(http: HttpServer, services: Services, session: RequestHandler) {
     this.#services = services;
@@ -46,6 +48,7 @@ export class Hub {
           comesFromOwnOrigin({ origin: req.headers.origin, fetchSite: req.headers['sec-fetch-site'] }, PUBLIC_ORIGIN),
         ),
     });
+    this.#forgetHandshake = forgetHandshakes(this.io);
     this.io.use((socket, next) => void this.#admit(session, socket, next));
     this.io.on('connection', (socket) => this.#serve(socket));
   }
@@ -82,6 +85,7 @@ export class Hub {
   }
 
   #serve(socket: AppSocket): void {
+    this.#forgetHandshake(socket);
     this.#on(socket, 'thread.enter', async ({ commissionId, threadId }) => {
       if (!(await mayReadThread(this.#services.db.manager, socket.data.accountId, commissionId, threadId)))
         return 'not-found';

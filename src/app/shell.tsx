@@ -1,10 +1,11 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { lazy, Suspense, useEffect, useRef, useState, useSyncExternalStore } from 'react';
-import { Form, Link, NavLink, Outlet, useLocation, useSearchParams } from 'react-router-dom';
+import { lazy, Suspense, useEffect, useState, useSyncExternalStore } from 'react';
+import { Form, Link, NavLink, Outlet, ScrollRestoration, useSearchParams } from 'react-router-dom';
 import { BrandMark } from '../components/ui/brand-mark.tsx';
 import { Notice } from '../components/ui/notice.tsx';
 import { Skeleton } from '../components/ui/skeleton.tsx';
 import { SkipLink, stripLinkClass, TopStrip } from '../components/ui/top-strip.tsx';
+import { useArrival } from '../hooks/use-arrival.ts';
 import { benchQuery } from '../lib/queries/commissions.ts';
 import { meQuery } from '../lib/queries/me.ts';
 import { connectionState, openRealtime } from '../lib/socket.ts';
@@ -56,31 +57,6 @@ function Unread() {
   ) : null;
 }
 
-/** Moves the focus to the page's heading after a change of page, and names the page in the title. */
-function useArrival(): void {
-  const { pathname } = useLocation();
-  const first = useRef(true);
-  useEffect(() => {
-    const arrive = (): boolean => {
-      const heading = document.querySelector('h1');
-      if (!heading) return false;
-      document.title = `${heading.textContent} · Ferrule`;
-      if (!first.current) {
-        heading.tabIndex = -1;
-        heading.focus({ preventScroll: true });
-      }
-      first.current = false;
-      return true;
-    };
-    if (arrive()) return;
-    const watcher = new MutationObserver(() => {
-      if (arrive()) watcher.disconnect();
-    });
-    watcher.observe(document.body, { childList: true, subtree: true });
-    return () => watcher.disconnect();
-  }, [pathname]);
-}
-
 function Frame() {
   const { data: me } = useSuspenseQuery(meQuery());
   const isClientOnly = me.shops.length === 0 && !me.isSteward;
@@ -88,6 +64,7 @@ function Frame() {
   useEffect(() => void openRealtime(), []);
   return (
     <>
+      <ScrollRestoration />
       <SkipLink target="page" />
       <TopStrip
         homeLink={(mark) => (

@@ -1,7 +1,7 @@
 import { useMutation, useQueryClient, type QueryKey } from '@tanstack/react-query';
 import { useRef } from 'react';
 import type { AnyRoute, RouteInput, RouteOutput } from '../../shared/contracts/route.ts';
-import { api, ApiProblem } from '../lib/api.ts';
+import { api, ApiProblem, ownProblem } from '../lib/api.ts';
 
 export interface ActOptions<T extends AnyRoute> {
   /** Queries that the act makes stale, besides what its realtime event tells. */
@@ -15,6 +15,12 @@ export interface Act<T extends AnyRoute> {
   problem: ApiProblem | null;
   forget: () => void;
 }
+
+/** Whatever else went wrong is said too: a button that does nothing at all would be worse. */
+const problemFrom = (error: Error | null): ApiProblem | null =>
+  error === null || error instanceof ApiProblem
+    ? error
+    : ownProblem('unexpected', 'What you wrote is kept. Load the page again and try once more.');
 
 /**
  * One act of the API behind a button. A try that failed is sent again under the same idempotency key, so that pressing
@@ -39,7 +45,7 @@ export function useAct<T extends AnyRoute>(route: T, options: ActOptions<T> = {}
   return {
     run: (input) => mutation.mutate(input),
     pending: mutation.isPending,
-    problem: mutation.error instanceof ApiProblem ? mutation.error : null,
+    problem: problemFrom(mutation.error),
     forget: mutation.reset,
   };
 }

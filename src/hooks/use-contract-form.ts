@@ -1,6 +1,8 @@
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import type { QueryKey } from '@tanstack/react-query';
 import type { AnyRoute, RouteInput, RouteOutput } from '../../shared/contracts/route.ts';
+import type { ProblemError } from '../../shared/problems/problems.ts';
+import { ownProblem } from '../lib/api.ts';
 import { useAct, type Act } from './use-act.ts';
 import { useDraft } from './use-draft.ts';
 
@@ -14,6 +16,7 @@ export interface ContractForm<T extends AnyRoute, V extends FormValues> {
   /** What is wrong with a value, by its JSON Pointer below the body: `title`, `readings/0/text`. */
   errorAt: (pointer: string) => string | undefined;
   submit: () => void;
+  /** Its problem is also what the contract found before anything was sent: no finding is without a place on the page. */
   act: Act<T>;
   /** Something typed differs from where the form began, and is kept on the device. */
   isDraft: boolean;
@@ -29,6 +32,11 @@ export interface ContractFormOptions<T extends AnyRoute, V extends FormValues> {
   onDone?: (output: RouteOutput<T>) => void;
 }
 
+/** Brings the reader to what needs attention, in the form they are in. */
+function focusFirstInvalid(): void {
+  document.activeElement?.closest('form')?.querySelector<HTMLElement>('[aria-invalid="true"]')?.focus();
+}
+
 /**
  * A form of one route: checked by the contract that the server checks by, with the server's own findings at the same
  * fields, and every value kept as a draft until it is saved.
@@ -39,38 +47,51 @@ export function useContractForm<T extends AnyRoute, V extends FormValues>(
 ): ContractForm<T, V> {
   const begun = JSON.stringify(options.initial);
   const [kept, keep, forget] = useDraft(`form-${options.name}`, begun);
-  const [found, setFound] = useState<Record<string, string>>({});
+  const [found, setFound] = useState<readonly ProblemError[]>([]);
   const values = { ...options.initial, ...(JSON.parse(kept) as V) };
-  const act = useAct(route, {
+  const [sent, setSent] = useState('');
+  const sending = useAct(route, {
     ...(options.stale ? { stale: options.stale } : {}),
     onDone: (output) => {
-      forget();
+      // What was typed while the answer was on its way was not in it.
+      if (kept === sent) forget();
       options.onDone?.(output);
     },
   });
-  const fromServer = Object.fromEntries(
-    (act.problem?.problem.errors ?? []).map((error) => [error.pointer.replace(/^\/body\//, ''), error.message]),
-  );
+  const act: Act<T> = {
+    ...sending,
+    run: (input) => {
+      setSent(kept);
+      sending.run(input);
+    },
+  };
+  const errors = found.length > 0 ? found : (act.problem?.problem.errors ?? []);
+  useEffect(() => {
+    if (errors.length > 0) focusFirstInvalid();
+    // Only a new set of findings moves the focus, not a new render of the same ones.
+    // eslint-disable-next-line react-hooks/exhaustive-deps
+  }, [found, act.problem]);
   const patch = (changes: Partial<V>): void => {
-    setFound({});
+    setFound([]);
     keep(JSON.stringify({ ...values, ...changes }));
   };
   return {
     values,
     set: (name, value) => patch({ [name]: value } as unknown as Partial<V>),
     patch,
-    errorAt: (pointer) => found[pointer] ?? fromServer[pointer],
+    errorAt: (pointer) => errors.find((error) => error.pointer === `/body/${pointer}`)?.message,
     submit: () => {
       const input = options.toInput(values);
       const parsed = route.body.safeParse((input as { body?: unknown }).body ?? {});
       setFound(
-        parsed.success
-          ? {}
-          : Object.fromEntries(parsed.error.issues.map((issue) => [issue.path.join('/'), issue.message])),
+        (parsed.error?.issues ?? []).map((issue) => ({
+          pointer: `/body/${issue.path.map(String).join('/')}`,
+          message: issue.message,
+        })),
       );
       if (parsed.success) act.run(input);
     },
-    act,
+    act: found.length > 0 ? { ...act, problem: ownProblem('input-invalid', 'Nothing was sent yet.', found) } : act,
     isDraft: kept !== begun,
     forget,
   };

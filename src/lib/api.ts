@@ -5,6 +5,7 @@ import {
   problemType,
   type Problem,
   type ProblemCode,
+  type ProblemError,
 } from '../../shared/problems/problems.ts';
 
 /** A refusal as the server tells it (RFC 9457), or one made here when no server answered. */
@@ -24,14 +25,19 @@ export class ApiProblem extends Error {
 export const isProblem = (thrown: unknown, code?: ProblemCode): thrown is ApiProblem =>
   thrown instanceof ApiProblem && (code === undefined || thrown.code === code);
 
-const unreachable = (): ApiProblem =>
+/** A refusal made on this side, for what the server did not get to see. */
+export const ownProblem = (code: ProblemCode, detail: string, errors?: readonly ProblemError[]): ApiProblem =>
   new ApiProblem({
-    type: problemType('upstream-unavailable'),
-    ...PROBLEMS['upstream-unavailable'],
-    detail: 'What you wrote is kept. Try again when the connection is back.',
+    type: problemType(code),
+    ...PROBLEMS[code],
+    detail,
     instance: 'urn:local',
-    code: 'upstream-unavailable',
+    code,
+    ...(errors ? { errors: [...errors] } : {}),
   });
+
+const unreachable = (): ApiProblem =>
+  ownProblem('upstream-unavailable', 'What you wrote is kept. Try again when the connection is back.');
 
 export interface CallOptions {
   signal?: AbortSignal;

@@ -1,4 +1,5 @@
 import { FirstSchema1796127050254 } from './1796127050254-first-schema.ts';
+import { PartyIndexes1796134200000 } from './1796134200000-party-indexes.ts';
 
 /** Every migration in order. */
-export const ALL_MIGRATIONS = [FirstSchema1796127050254];
+export const ALL_MIGRATIONS = [FirstSchema1796127050254, PartyIndexes1796134200000];

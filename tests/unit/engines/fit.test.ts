@@ -131,6 +131,8 @@ describe('clearance and what comes off', () => {
     expect(verdictAt(50 + doubtUm - 0.1)).toBe('cannot-be-decided');
     expect(verdictAt(50 + doubtUm + 0.1)).toBe('conforms');
     expect(verdictAt(100 - doubtUm - 0.1)).toBe('conforms');
+    expect(verdictAt(100 - doubtUm + 0.1)).toBe('cannot-be-decided');
+    expect(verdictAt(100 + doubtUm - 0.1)).toBe('cannot-be-decided');
     expect(verdictAt(100 + doubtUm + 0.1)).toBe('does-not-conform');
   });
 
