@@ -72,9 +72,9 @@ export class Api {
     const open = this.#openContext(req, res);
     if (!open.sessionAccountId) throw new AppError('not-signed-in');
     const commissionId = typeof req.params['commissionId'] === 'string' ? req.params['commissionId'] : null;
-    const known = await loadActor(open.manager, open.sessionAccountId, { commissionId });
+    const known = await loadActor(open.db, open.sessionAccountId, { commissionId });
     if (!known) throw new AppError('not-signed-in');
-    if (req.method !== 'GET') await this.services.limits.take('write', known.person.accountId);
+    if (req.method !== 'GET') await this.services.limits.takeWrite(known.person.accountId);
     return { ...open, ...known, ability: abilityFor(known.actor), todayIso: dayIn(known.person.timeZone, open.now) };
   }
 

@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto';
 import pg from 'pg';
-import { RateLimiterPostgres, RateLimiterRes } from 'rate-limiter-flexible';
+import { RateLimiterMemory, RateLimiterPostgres, RateLimiterRes } from 'rate-limiter-flexible';
 import { AppError } from '../errors.ts';
 
 interface DoorPlan {
@@ -12,7 +12,7 @@ interface DoorPlan {
   readonly growsToS?: number;
 }
 
-/** Tries in a window, per key, counted in PostgreSQL so that every process shares them. */
+/** Tries in a window, per key, counted in PostgreSQL so that they outlive the process. */
 const DOORS = {
   /** Wrong passwords for one account from one address; a stranger elsewhere cannot lock the owner out. */
   'sign-in-pair': { points: 5, durationS: 15 * 60, blockS: 60, growsToS: 60 * 60 },
@@ -23,13 +23,16 @@ const DOORS = {
   link: { points: 30, durationS: 15 * 60, blockS: 60 },
   invite: { points: 60, durationS: 60 * 60, blockS: 0 },
   password: { points: 10, durationS: 15 * 60, blockS: 60 },
-  /** Any unsafe request of one account. */
-  write: { points: 600, durationS: 60, blockS: 0 },
 } as const satisfies Record<string, DoorPlan>;
+
+/** Any unsafe request of one account: a brake on a runaway client, counted in the process, where it costs no statement. */
+const WRITES = { points: 600, durationS: 60 };
 
 export type Door = keyof typeof DOORS;
 
 export interface Limits {
+  /** Takes one unsafe request of an account; throws as `take`. */
+  takeWrite(accountId: string): Promise<void>;
   /** Takes one try; throws `too-many-tries` with the seconds to wait. */
   take(door: Door, key: string): Promise<void>;
   /** Forgets the tries of a key, after a success. */
@@ -41,6 +44,11 @@ const ONE_DAY_S = 24 * 60 * 60;
 
 /** Keys hold addresses of people: the table gets their hash, which also keeps a long one within its column. */
 const hidden = (key: string): string => createHash('sha256').update(key).digest('base64url');
+
+const tooMany = (waitS: number): AppError => {
+  const retryAfterS = Math.max(1, Math.ceil(waitS));
+  return new AppError('too-many-tries', `Nothing is lost. Try again in ${retryAfterS} s.`, { retryAfterS });
+};
 
 /**
  * The counters have two connections of their own: tries are counted inside transactions too, and transactions that wait
@@ -89,15 +97,24 @@ export function createLimits(databaseUrl: string, factor = 1): Limits {
     return waitS;
   }
 
+  const writes = new RateLimiterMemory({ points: WRITES.points * factor, duration: WRITES.durationS });
+
   return {
+    async takeWrite(accountId) {
+      try {
+        await writes.consume(accountId);
+      } catch (refusal) {
+        if (!(refusal instanceof RateLimiterRes)) throw refusal;
+        throw tooMany(refusal.msBeforeNext / 1000);
+      }
+    },
     async take(door, key) {
       const hiddenKey = hidden(key);
       try {
         await doors.get(door)?.consume(hiddenKey);
       } catch (refusal) {
         if (!(refusal instanceof RateLimiterRes)) throw refusal;
-        const retryAfterS = Math.max(1, Math.ceil(await refusedForS(door, hiddenKey, refusal)));
-        throw new AppError('too-many-tries', `Nothing is lost. Try again in ${retryAfterS} s.`, { retryAfterS });
+        throw tooMany(await refusedForS(door, hiddenKey, refusal));
       }
     },
     async forget(door, key) {

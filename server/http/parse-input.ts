@@ -1,17 +1,7 @@
 import type { Request } from 'express';
-import type { z } from 'zod';
 import type { AnyRoute, ParsedInput } from '../../shared/contracts/route.ts';
-import type { ProblemError } from '../../shared/problems/problems.ts';
+import { pointersOf } from '../../shared/problems/pointers.ts';
 import { InputInvalid, NotFound } from '../errors.ts';
-
-const escapePointer = (segment: PropertyKey): string => String(segment).replaceAll('~', '~0').replaceAll('/', '~1');
-
-/** Zod issues as JSON Pointers (RFC 6901) below `/body`, `/query` or `/params`. */
-export const pointersOf = (place: string, issues: readonly z.core.$ZodIssue[]): ProblemError[] =>
-  issues.map((issue) => ({
-    pointer: ['', place, ...issue.path.map(escapePointer)].join('/'),
-    message: issue.message,
-  }));
 
 /** Parses params, query and body by the contract and collects every issue. An id that is no id is simply not found. */
 export function parseInput<T extends AnyRoute>(route: T, req: Request): ParsedInput<T> {

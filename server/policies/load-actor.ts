@@ -1,6 +1,8 @@
-import type { EntityManager } from 'typeorm';
+import type { QueryConfig } from 'pg';
+import type { DataSource, EntityManager } from 'typeorm';
 import type { Actor, Membership } from '../../shared/abilities/actor.ts';
 import type { LengthUnit, ShopRole } from '../../shared/contracts/vocabulary.ts';
+import { poolOf } from '../db/data-source.ts';
 import type { Person } from '../http/context.ts';
 
 interface ActorRow {
@@ -42,26 +44,52 @@ export interface KnownActor {
   actor: Actor;
 }
 
-export async function loadActor(
+interface ActorScope {
+  commissionId?: string | null;
+  everyOpenCommission?: boolean;
+}
+
+/** The statement that says who is asking; also what the bench puts before its bare handler. */
+export function actorStatement(
+  accountId: string,
+  { commissionId, everyOpenCommission = false }: ActorScope,
+): QueryConfig {
+  const here = commissionId && isUuid.test(commissionId) ? commissionId : null;
+  // Planned once per connection: it comes before every request. Every open commission is another plan, and seldom asked for.
+  return {
+    ...(everyOpenCommission ? {} : { name: 'actor' }),
+    text: ACTOR_SQL,
+    values: [accountId, here, everyOpenCommission],
+  };
+}
+
+const known = (row: ActorRow | undefined): KnownActor | null =>
+  row
+    ? {
+        person: {
+          accountId: row.id,
+          displayName: row.display_name,
+          email: row.email,
+          timeZone: row.time_zone,
+          preferredUnit: row.preferred_unit,
+        },
+        actor: { accountId: row.id, isSteward: row.is_steward, shops: row.shops, memberships: row.memberships },
+      }
+    : null;
+
+/** Who is asking, as committed. */
+export async function loadActor(db: DataSource, accountId: string, scope: ActorScope): Promise<KnownActor | null> {
+  const { rows } = await poolOf(db).query<ActorRow>(actorStatement(accountId, scope));
+  return known(rows[0]);
+}
+
+/** Who is asking, as a transaction that is not over sees it. */
+export async function loadActorWithin(
   manager: EntityManager,
   accountId: string,
-  scope: { commissionId?: string | null; everyOpenCommission?: boolean },
+  scope: ActorScope,
 ): Promise<KnownActor | null> {
-  const commissionId = scope.commissionId && isUuid.test(scope.commissionId) ? scope.commissionId : null;
-  const [row] = await manager.query<ActorRow[]>(ACTOR_SQL, [
-    accountId,
-    commissionId,
-    scope.everyOpenCommission ?? false,
-  ]);
-  if (!row) return null;
-  return {
-    person: {
-      accountId: row.id,
-      displayName: row.display_name,
-      email: row.email,
-      timeZone: row.time_zone,
-      preferredUnit: row.preferred_unit,
-    },
-    actor: { accountId: row.id, isSteward: row.is_steward, shops: row.shops, memberships: row.memberships },
-  };
+  const { text, values = [] } = actorStatement(accountId, scope);
+  const [row] = await manager.query<ActorRow[]>(text, values as unknown[]);
+  return known(row);
 }

@@ -72,7 +72,7 @@ export class Hub {
   async #admit(session: RequestHandler, socket: AppSocket, next: (error?: Error) => void): Promise<void> {
     try {
       const accountId = await handshakeAccountId(session, socket.request);
-      const person = accountId ? await personOf(this.#services.db.manager, accountId) : null;
+      const person = accountId ? await personOf(this.#services.db, accountId) : null;
       if (!person) return next(new Error('not-signed-in'));
       socket.data.accountId = person.accountId;
       socket.data.displayName = person.displayName;
@@ -87,8 +87,7 @@ export class Hub {
   #serve(socket: AppSocket): void {
     this.#forgetHandshake(socket);
     this.#on(socket, 'thread.enter', async ({ commissionId, threadId }) => {
-      if (!(await mayReadThread(this.#services.db.manager, socket.data.accountId, commissionId, threadId)))
-        return 'not-found';
+      if (!(await mayReadThread(this.#services.db, socket.data.accountId, commissionId, threadId))) return 'not-found';
       await socket.join(threadRoom(threadId));
       this.#presence.enter(threadId, socket.id, socket.data);
       this.#tellPresence(threadId);
@@ -138,12 +137,12 @@ export class Hub {
     const concerned = [...sockets].filter((socket) => keys.some((key) => socket.rooms.has(keyRoom(key))));
     for (const socket of concerned) {
       const { accountId } = socket.data;
-      const rooms = await roomsOf(this.#services.db.manager, accountId);
+      const rooms = await roomsOf(this.#services.db, accountId);
       const allowed = new Set(rooms.map(keyRoom));
       for (const room of socket.rooms) if (room.startsWith('key:') && !allowed.has(room)) await socket.leave(room);
       await socket.join([...allowed]);
       for (const threadId of this.#presence.threadsOf(socket.id)) {
-        if (await mayReadThread(this.#services.db.manager, accountId, null, threadId)) continue;
+        if (await mayReadThread(this.#services.db, accountId, null, threadId)) continue;
         await socket.leave(threadRoom(threadId));
         this.#presence.leave(threadId, socket.id);
         this.#tellPresence(threadId);

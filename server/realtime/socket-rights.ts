@@ -1,4 +1,4 @@
-import type { EntityManager } from 'typeorm';
+import type { DataSource } from 'typeorm';
 import { abilityFor, mayDo } from '../../shared/abilities/ability.ts';
 import { Thread } from '../entities/thread.ts';
 import { loadActor } from '../policies/load-actor.ts';
@@ -10,27 +10,27 @@ const keysFor = (actor: { accountId: string; shops: readonly { shopId: string; r
 ];
 
 export async function personOf(
-  manager: EntityManager,
+  db: DataSource,
   accountId: string,
 ): Promise<{ accountId: string; displayName: string; rooms: string[] } | null> {
-  const known = await loadActor(manager, accountId, {});
+  const known = await loadActor(db, accountId, {});
   return known && { accountId, displayName: known.person.displayName, rooms: keysFor(known.actor) };
 }
 
-export async function roomsOf(manager: EntityManager, accountId: string): Promise<string[]> {
-  const known = await loadActor(manager, accountId, {});
+export async function roomsOf(db: DataSource, accountId: string): Promise<string[]> {
+  const known = await loadActor(db, accountId, {});
   return known ? keysFor(known.actor) : [];
 }
 
 /** The same ability as the API asks: may this account read this thread just now? */
 export async function mayReadThread(
-  manager: EntityManager,
+  db: DataSource,
   accountId: string,
   commissionId: string | null,
   threadId: string,
 ): Promise<boolean> {
-  const thread = await manager.findOneBy(Thread, { id: threadId, ...(commissionId ? { commissionId } : {}) });
+  const thread = await db.manager.findOneBy(Thread, { id: threadId, ...(commissionId ? { commissionId } : {}) });
   if (!thread) return false;
-  const known = await loadActor(manager, accountId, { commissionId: thread.commissionId });
+  const known = await loadActor(db, accountId, { commissionId: thread.commissionId });
   return known !== null && mayDo(abilityFor(known.actor), 'read', 'Thread', thread);
 }

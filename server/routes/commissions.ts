@@ -3,7 +3,7 @@ import { abilityFor } from '../../shared/abilities/ability.ts';
 import { createCommission } from '../commands/commissions/create-commission.ts';
 import { updateCommission } from '../commands/commissions/update-commission.ts';
 import type { Api } from '../http/api.ts';
-import { loadActor } from '../policies/load-actor.ts';
+import { loadActorWithin } from '../policies/load-actor.ts';
 import { presentCommission } from '../presenters/commission.ts';
 import { listCommissions } from '../queries/commissions/list-commissions.ts';
 import { loadCommission } from '../queries/commissions/load-commission.ts';
@@ -13,7 +13,7 @@ export function mountCommissions(api: Api): void {
   api.signedIn(contracts.createCommission, async (ctx, input) => {
     const row = await createCommission(ctx, input);
     // The opener has just become the lead's person here; their memberships are read again inside the transaction.
-    const known = await loadActor(ctx.manager, ctx.actor.accountId, { commissionId: row.id });
+    const known = await loadActorWithin(ctx.manager, ctx.actor.accountId, { commissionId: row.id });
     const actor = known?.actor ?? ctx.actor;
     return presentCommission(abilityFor(actor), actor, row);
   });

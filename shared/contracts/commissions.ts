@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import {
+  amountMinor,
   emailAddress,
   inCommission,
   instant,
@@ -22,7 +23,7 @@ import {
   SHOP_TINTS,
 } from './vocabulary.ts';
 
-const budgetMinor = z.int().min(0).max(1_000_000_000);
+const budgetMinor = amountMinor.max(1_000_000_000, 'That is more than one commission can be');
 
 /** What the signed-in person is in this commission; the browser builds its ability from it. */
 export const membershipView = z.object({

@@ -11,6 +11,14 @@ export const instant = z.iso.datetime();
 /** Counts saves of one record; a save names the revision it started from. */
 export const revision = z.int().min(1);
 
+/** A measured or estimated figure; its unit is in the name of the field. */
+export const figure = z.number({ error: 'Write a number' });
+
+/** An amount in the minor unit of its currency. */
+export const amountMinor = z
+  .int({ error: 'Write an amount, with no more decimals than its currency has' })
+  .min(0, 'Give 0 or more');
+
 /** One line of typed text, trimmed. */
 export const line = (maxLength: number) =>
   z

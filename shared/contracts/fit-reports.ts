@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { inCommission, instant, line, optionalProse, prose, revision, uuid } from './common.ts';
+import { amountMinor, figure, inCommission, instant, line, optionalProse, prose, revision, uuid } from './common.ts';
 import { defineRoute, nothing } from './route.ts';
 import { CONSENT_STATES, CURRENCIES, JOINT_SIDES, NOTE_STATES, REPORT_STATES } from './vocabulary.ts';
 
@@ -132,15 +132,15 @@ export const answerFitReport = defineRoute({
       revision,
       method: prose(4000),
       cutSide: z.enum(JOINT_SIDES),
-      removeOnDiameterUm: z.number().min(0, 'Give 0 or more').max(5000, 'That is more than 5 mm; check the unit'),
-      overLengthMm: z.number().gt(0).max(400).nullable(),
+      removeOnDiameterUm: figure.min(0, 'Give 0 or more').max(5000, 'That is more than 5 mm; check the unit'),
+      overLengthMm: figure.gt(0, 'Give a length above 0').max(400, 'Give at most 400 mm').nullable(),
       risk: optionalProse(2000),
       shows: z.boolean(),
       whereItShows: optionalProse(500),
-      costMinor: z.int().min(0).max(100_000_000),
+      costMinor: amountMinor.max(100_000_000, 'That is more than one rework can be'),
       currency: z.enum(CURRENCIES),
       costBorneByPartyId: uuid.nullable(),
-      effectDays: z.number().min(0).max(400),
+      effectDays: figure.min(0, 'Give 0 or more').max(400, 'Give at most 400 days'),
     })
     .refine((note) => !note.shows || note.whereItShows.length > 0, {
       error: 'Say where it will show',

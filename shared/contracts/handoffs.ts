@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { inCommission, instant, isoDay, optionalProse, prose, revision, uuid } from './common.ts';
+import { figure, inCommission, instant, isoDay, optionalProse, prose, revision, uuid } from './common.ts';
 import { defineRoute, nothing } from './route.ts';
 import { OFFER_STATES } from './vocabulary.ts';
 
@@ -79,7 +79,7 @@ export const createHandoff = defineRoute({
       partIds: z.array(uuid).min(1, 'Choose at least one part').max(50),
       fromLegId: uuid.nullable(),
       toLegId: uuid.nullable(),
-      transitDays: z.number().min(0).max(120),
+      transitDays: figure.min(0, 'Give 0 or more').max(120, 'Give at most 120 days'),
       carriage: optionalProse(120),
     })
     .refine((handoff) => handoff.fromPartyId !== handoff.toPartyId, {

@@ -1,13 +1,12 @@
 import { z } from 'zod';
-import { inCommission, instant, line, optionalProse, revision, uuid } from './common.ts';
+import { figure, inCommission, instant, line, optionalProse, revision, uuid } from './common.ts';
 import { defineRoute, nothing } from './route.ts';
 import { JOINT_KINDS, JOINT_SIDES, LENGTH_UNITS } from './vocabulary.ts';
 
 /** A nominal size this product works with, in mm. ISO 286 tables are carried up to 180 mm. */
-const nominalMm = z.number().gt(0.5, 'Give a size above 0.5 mm').max(180, 'Give a size up to 180 mm');
+const nominalMm = figure.gt(0.5, 'Give a size above 0.5 mm').max(180, 'Give a size up to 180 mm');
 /** A clearance on diameter in um; negative is interference. */
-const clearanceUm = z
-  .number()
+const clearanceUm = figure
   .min(-2000, 'A clearance below −2000 µm is not one')
   .max(5000, 'Give a clearance up to 5000 µm');
 
@@ -26,18 +25,18 @@ const jointFields = {
   holeClass: z
     .string()
     .trim()
-    .regex(/^[D-S]S?\d{1,2}$/i, 'Write a class such as H8')
+    .regex(/^[A-Za-z]{1,2}\d{1,2}$/, 'Write a class such as H8')
     .nullable(),
   shaftClass: z
     .string()
     .trim()
-    .regex(/^[d-s]s?\d{1,2}$/i, 'Write a class such as f7')
+    .regex(/^[A-Za-z]{1,2}\d{1,2}$/, 'Write a class such as f7')
     .nullable(),
   /** Plain words of a hand fit, for instance "hand slip". */
   handFit: z.string().trim().max(60).nullable(),
-  engagementMm: z.number().gt(0).max(400).nullable(),
+  engagementMm: figure.gt(0, 'Give a length above 0').max(400, 'Give at most 400 mm').nullable(),
   /** Length of the spigot that may be cut before the cut shows when the joint is closed. */
-  hiddenLengthMm: z.number().min(0).max(400).nullable(),
+  hiddenLengthMm: figure.min(0, 'Give 0 or more').max(400, 'Give at most 400 mm').nullable(),
   note: optionalProse(2000),
 };
 
@@ -155,17 +154,17 @@ export const updateJoint = defineRoute({
 export const readingInput = z.object({
   text: z.string().trim().min(1, 'Type a reading').max(30),
   unit: z.enum(LENGTH_UNITS),
-  stationMm: z.number().min(0).max(1000).nullable().default(null),
-  angleDeg: z.number().min(0).max(360).nullable().default(null),
+  stationMm: figure.min(0, 'Give 0 or more').max(1000, 'Give at most 1000 mm').nullable().default(null),
+  angleDeg: figure.min(0, 'Give 0 to 360').max(360, 'Give 0 to 360').nullable().default(null),
 });
 
 export const readingsInput = z.object({
   side: z.enum(JOINT_SIDES),
   /** Smallest step of the gauge, um: 10 for a digital caliper, 1 for a micrometer. */
-  resolutionUm: z.number().gt(0, "Give the gauge's smallest step").max(1000),
+  resolutionUm: figure.gt(0, "Give the gauge's smallest step").max(1000, 'Give at most 1000 µm'),
   gauge: z.string().trim().max(60).nullable().default(null),
-  temperatureC: z.number().min(-30).max(60).nullable().default(null),
-  humidityPct: z.number().min(0).max(100).nullable().default(null),
+  temperatureC: figure.min(-30, 'Give −30 to 60 °C').max(60, 'Give −30 to 60 °C').nullable().default(null),
+  humidityPct: figure.min(0, 'Give 0 to 100 %').max(100, 'Give 0 to 100 %').nullable().default(null),
   readings: z.array(readingInput).min(1, 'Type at least one reading').max(200),
 });
 

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { inCommission, isoDay, line, optionalProse, revision, uuid } from './common.ts';
+import { figure, inCommission, isoDay, line, optionalProse, revision, uuid } from './common.ts';
 import { defineRoute, nothing } from './route.ts';
 import { LEG_KINDS, LEG_STATES, PART_KINDS } from './vocabulary.ts';
 
@@ -60,7 +60,7 @@ export const updatePart = defineRoute({
 });
 
 /** Working days, Monday to Friday. */
-const workingDays = z.number().min(0, 'Give a number of days, 0 or more').max(400, 'Give at most 400 days');
+const workingDays = figure.min(0, 'Give a number of days, 0 or more').max(400, 'Give at most 400 days');
 
 export const legView = z.object({
   id: uuid,

@@ -1,8 +1,7 @@
-import { useEffect, useState } from 'react';
+import { useEffect, useRef } from 'react';
 import type { QueryKey } from '@tanstack/react-query';
 import type { AnyRoute, RouteInput, RouteOutput } from '../../shared/contracts/route.ts';
-import type { ProblemError } from '../../shared/problems/problems.ts';
-import { ownProblem } from '../lib/api.ts';
+import { announce } from '../components/ui/announcer.ts';
 import { useAct, type Act } from './use-act.ts';
 import { useDraft } from './use-draft.ts';
 
@@ -15,8 +14,8 @@ export interface ContractForm<T extends AnyRoute, V extends FormValues> {
   patch: (changes: Partial<V>) => void;
   /** What is wrong with a value, by its JSON Pointer below the body: `title`, `readings/0/text`. */
   errorAt: (pointer: string) => string | undefined;
-  submit: () => void;
-  /** Its problem is also what the contract found before anything was sent: no finding is without a place on the page. */
+  /** Sends the values, with these changes first. */
+  submit: (changes?: Partial<V>) => void;
   act: Act<T>;
   /** Something typed differs from where the form began, and is kept on the device. */
   isDraft: boolean;
@@ -47,52 +46,52 @@ export function useContractForm<T extends AnyRoute, V extends FormValues>(
 ): ContractForm<T, V> {
   const begun = JSON.stringify(options.initial);
   const [kept, keep, forget] = useDraft(`form-${options.name}`, begun);
-  const [found, setFound] = useState<readonly ProblemError[]>([]);
   const values = { ...options.initial, ...(JSON.parse(kept) as V) };
-  const [sent, setSent] = useState('');
-  const sending = useAct(route, {
+  const latest = useRef({ kept, sent: '' });
+  useEffect(() => {
+    latest.current.kept = kept;
+  });
+  const act = useAct(route, {
     ...(options.stale ? { stale: options.stale } : {}),
     onDone: (output) => {
       // What was typed while the answer was on its way was not in it.
-      if (kept === sent) forget();
+      if (latest.current.kept === latest.current.sent) forget();
+      announce('Saved.');
       options.onDone?.(output);
     },
   });
-  const act: Act<T> = {
-    ...sending,
-    run: (input) => {
-      setSent(kept);
-      sending.run(input);
-    },
-  };
-  const errors = found.length > 0 ? found : (act.problem?.problem.errors ?? []);
+  const errors = act.problem?.problem.errors ?? [];
   useEffect(() => {
     if (errors.length > 0) focusFirstInvalid();
     // Only a new set of findings moves the focus, not a new render of the same ones.
     // eslint-disable-next-line react-hooks/exhaustive-deps
-  }, [found, act.problem]);
+  }, [act.problem]);
+  const keepAll = (changes: Partial<V>): { all: V; text: string } => {
+    const all = { ...values, ...changes };
+    const text = JSON.stringify(all);
+    keep(text);
+    return { all, text };
+  };
   const patch = (changes: Partial<V>): void => {
-    setFound([]);
-    keep(JSON.stringify({ ...values, ...changes }));
+    // A finding is over once its value changes; a refusal of another kind stays in sight until the next try.
+    if (act.problem?.code === 'input-invalid') act.forget();
+    keepAll(changes);
   };
   return {
     values,
     set: (name, value) => patch({ [name]: value } as unknown as Partial<V>),
     patch,
     errorAt: (pointer) => errors.find((error) => error.pointer === `/body/${pointer}`)?.message,
-    submit: () => {
-      const input = options.toInput(values);
-      const parsed = route.body.safeParse((input as { body?: unknown }).body ?? {});
-      setFound(
-        (parsed.error?.issues ?? []).map((issue) => ({
-          pointer: `/body/${issue.path.map(String).join('/')}`,
-          message: issue.message,
-        })),
-      );
-      if (parsed.success) act.run(input);
+    submit: (changes = {}) => {
+      const { all, text } = keepAll(changes);
+      latest.current.sent = text;
+      act.run(options.toInput(all));
     },
-    act: found.length > 0 ? { ...act, problem: ownProblem('input-invalid', 'Nothing was sent yet.', found) } : act,
+    act,
     isDraft: kept !== begun,
-    forget,
+    forget: () => {
+      act.forget();
+      forget();
+    },
   };
 }

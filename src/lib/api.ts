@@ -1,4 +1,5 @@
 import { API_BASE, type AnyRoute, type RouteInput, type RouteOutput } from '../../shared/contracts/route.ts';
+import { pointersOf } from '../../shared/problems/pointers.ts';
 import {
   PROBLEMS,
   problemSchema,
@@ -67,13 +68,19 @@ export async function problemOf(response: { json: () => Promise<unknown> }): Pro
   return parsed.success ? new ApiProblem(parsed.data) : unreachable();
 }
 
-/** Calls a route of the contracts and parses its answer by them. Throws `ApiProblem`; it never shows or redirects anything. */
+/**
+ * Calls a route of the contracts: what is sent is checked by them first, since JSON would turn a figure that is none into
+ * an empty one, and what comes back after. Throws `ApiProblem`; it never shows or redirects anything.
+ */
 export async function api<T extends AnyRoute>(
   route: T,
   input: RouteInput<T>,
   options: CallOptions = {},
 ): Promise<RouteOutput<T>> {
-  const { body } = input as AnyInput;
+  const { body = {} } = input as AnyInput;
+  const checked = route.body.safeParse(body);
+  if (!checked.success)
+    throw ownProblem('input-invalid', 'Nothing was sent yet.', pointersOf('body', checked.error.issues));
   const response = await fetch(addressOf(route, input), {
     method: route.method,
     credentials: 'same-origin',
@@ -82,7 +89,7 @@ export async function api<T extends AnyRoute>(
       ...(route.method === 'GET' ? {} : { 'content-type': 'application/json' }),
       ...(route.keyed ? { 'idempotency-key': options.idempotencyKey ?? crypto.randomUUID() } : {}),
     },
-    ...(route.method === 'GET' ? {} : { body: JSON.stringify(body ?? {}) }),
+    ...(route.method === 'GET' ? {} : { body: JSON.stringify(body) }),
     ...(options.signal ? { signal: options.signal } : {}),
   }).catch((error: unknown) => {
     if (options.signal?.aborted) throw error;

@@ -13,7 +13,10 @@ export const createQueryClient = (): QueryClient =>
     queryCache: new QueryCache({ onError: signInAgain }),
     mutationCache: new MutationCache({ onError: signInAgain }),
     defaultOptions: {
+      // Offline is told at once, as any other failure; a paused act would send itself later, unasked.
+      mutations: { networkMode: 'always' },
       queries: {
+        networkMode: 'always',
         staleTime: 30_000,
         retry: (count, error) => count < 2 && (isProblem(error, 'upstream-unavailable') || isProblem(error, 'busy')),
       },

@@ -2,9 +2,11 @@ import type {
   CommissionState,
   JointKind,
   LegKind,
+  LegState,
   PartKind,
   PartyRole,
   ReportState,
+  ShopRole,
 } from '../../shared/contracts/vocabulary.ts';
 import type { Tone } from '../components/ui/tone.ts';
 
@@ -16,6 +18,12 @@ export const ROLE_WORDS: Readonly<Record<PartyRole, string>> = {
   installer: 'Installer',
   client: 'Client',
   guest: 'Guest',
+};
+
+export const SHOP_ROLE_WORDS: Readonly<Record<ShopRole, string>> = {
+  owner: 'Owner',
+  hand: 'Hand',
+  bookkeeper: 'Bookkeeper',
 };
 
 export const COMMISSION_STATE_WORDS: Readonly<Record<CommissionState, string>> = {
@@ -33,6 +41,13 @@ export const LEG_KIND_WORDS: Readonly<Record<LegKind, string>> = {
   blade: 'Blade',
   'bench-test': 'Bench test',
   other: 'Other work',
+};
+
+export const LEG_STATE_STAMPS: Readonly<Record<LegState, { words: string; tone: Tone }>> = {
+  planned: { words: 'Planned', tone: 'neutral' },
+  'under-way': { words: 'Under way', tone: 'brass' },
+  finished: { words: 'Finished', tone: 'verdigris' },
+  dropped: { words: 'Dropped', tone: 'neutral' },
 };
 
 export const PART_KIND_WORDS: Readonly<Record<PartKind, string>> = {

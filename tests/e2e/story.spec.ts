@@ -233,7 +233,7 @@ test('a tight fit, a rework note with photographs, an agreed day, and one answer
     await maker.getByRole('button', { name: 'Offer this day' }).click();
     await expect(installer.getByTestId('handoff-sides')).toContainText(`offers ${weekdayDayMonth(agreed)}`);
     await installer.getByRole('button', { name: `Accept ${shortDay(agreed)}` }).click();
-    await expect(maker.getByText(`Agreed ${shortDay(agreed)}`)).toBeVisible();
+    await expect(maker.getByText(`Agreed ${shortDay(agreed)}`, { exact: true })).toBeVisible();
     await expect(
       client.getByText(
         `Next agreed day: Hilt from Aldgrove Turning to Tinder Lane Electrics on ${weekdayDayMonth(agreed)}`,

@@ -10,7 +10,7 @@ const THIRTY_DAYS_MS = 30 * 24 * 60 * 60 * 1000;
 
 /** What waits on a person's hands over all their open commissions; bookkeepers' and guests' parts give no work. */
 export async function getBench(ctx: RequestContext): Promise<RouteOutput<typeof contract>> {
-  const known = await loadActor(ctx.manager, ctx.actor.accountId, { everyOpenCommission: true });
+  const known = await loadActor(ctx.db, ctx.actor.accountId, { everyOpenCommission: true });
   const working = (known?.actor.memberships ?? []).filter(
     (one) => one.shopRole !== 'bookkeeper' && !one.roles.includes('guest'),
   );

@@ -15,7 +15,7 @@ export function Component() {
         main={
           <div className="grid gap-5">
             <HowYouRead me={me} />
-            <PasswordSheet />
+            <PasswordSheet email={me.email} />
           </div>
         }
         side={

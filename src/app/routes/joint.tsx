@@ -7,7 +7,9 @@ import { RaiseForm } from '../../features/fit-reports/components/raise-form.tsx'
 import { FitSheet } from '../../features/joints/components/fit-sheet.tsx';
 import { ReadingEntry } from '../../features/joints/components/reading-entry.tsx';
 import { ReadingsTable } from '../../features/joints/components/readings-table.tsx';
+import { EditJoint } from '../../features/plan/components/joint-form.tsx';
 import { useSight } from '../../hooks/use-membership.ts';
+import { usePartyBook } from '../../hooks/use-party-names.ts';
 import { commissionQueries } from '../../lib/queries/commissions.ts';
 import { jointQueries } from '../../lib/queries/joints.ts';
 import { meQuery } from '../../lib/queries/me.ts';
@@ -22,6 +24,8 @@ export function Component() {
   const { data: me } = useSuspenseQuery(meQuery());
   const { data } = useSuspenseQuery(jointQueries.detail(commissionId, jointId));
   const { data: legs } = useSuspenseQuery(commissionQueries.legs(commissionId));
+  const { data: parts } = useSuspenseQuery(commissionQueries.parts(commissionId));
+  const { parties } = usePartyBook(commissionId);
   const { ability, mine } = useSight(commissionId);
   const { joint, readings } = data;
   const facts = { commissionId, holePartyId: joint.holePartyId, shaftPartyId: joint.shaftPartyId };
@@ -70,6 +74,14 @@ export function Component() {
                 />
               </Sheet>
             )
+          )}
+          {mayDo(ability, 'update', 'Joint', facts) && (
+            <Sheet title="Change the joint" note="What it is, and the fit that was agreed">
+              <details>
+                <summary className="min-h-thumb cursor-pointer py-2">Open the form</summary>
+                <EditJoint choices={{ commissionId, parties, parts }} joint={joint} />
+              </details>
+            </Sheet>
           )}
           <SubjectThreads
             commissionId={commissionId}

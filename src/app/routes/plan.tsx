@@ -4,7 +4,10 @@ import { TwoColumns } from '../../components/ui/page.tsx';
 import { Sheet } from '../../components/ui/sheet.tsx';
 import { LegActs, OpenHandoffs, WhoHasWhat } from '../../features/commissions/components/rooms.tsx';
 import { LegsSheet } from '../../features/plan/components/legs-sheet.tsx';
-import { HandoffForm, JointForm, LegForm, PartForm } from '../../features/plan/components/plan-forms.tsx';
+import { AddHandoff } from '../../features/plan/components/handoff-form.tsx';
+import { AddJoint } from '../../features/plan/components/joint-form.tsx';
+import { AddLeg } from '../../features/plan/components/leg-form.tsx';
+import { AddPart, EditPart } from '../../features/plan/components/part-form.tsx';
 import { useSight } from '../../hooks/use-membership.ts';
 import { usePartyBook } from '../../hooks/use-party-names.ts';
 import { commissionQueries } from '../../lib/queries/commissions.ts';
@@ -18,7 +21,7 @@ export function Component() {
   const { data: parts } = useSuspenseQuery(commissionQueries.parts(commissionId));
   const { data: legs } = useSuspenseQuery(commissionQueries.legs(commissionId));
   const today = todayIn();
-  const shared = { commissionId, parties, parts, legs };
+  const choices = { commissionId, parties, parts, legs };
   const [own = ''] = mine;
   const isLead = mayDo(ability, 'create', 'Leg', { commissionId, partyId: own });
   const mayHandOver = mayDo(ability, 'create', 'Handoff', { commissionId, fromPartyId: own, toPartyId: '' });
@@ -26,32 +29,46 @@ export function Component() {
     <TwoColumns
       main={
         <LegsSheet
-          commissionId={commissionId}
+          choices={choices}
           actsOf={(leg) => <LegActs commissionId={commissionId} leg={leg} today={today} />}
         />
       }
       side={
         <div className="grid gap-5">
-          <WhoHasWhat commissionId={commissionId} />
+          <WhoHasWhat
+            commissionId={commissionId}
+            {...(isLead
+              ? {
+                  actsOf: (part) => (
+                    <details>
+                      <summary className="min-h-thumb cursor-pointer py-2 text-note">Correct {part.name}</summary>
+                      <div className="pb-4">
+                        <EditPart commissionId={commissionId} parties={parties} part={part} />
+                      </div>
+                    </details>
+                  ),
+                }
+              : {})}
+          />
           <OpenHandoffs commissionId={commissionId} />
           {isLead && (
             <Sheet title="Add a part">
-              <PartForm {...shared} />
+              <AddPart {...choices} />
             </Sheet>
           )}
           {isLead && (
             <Sheet title="Add a leg">
-              <LegForm key={parts.length} {...shared} />
+              <AddLeg key={`${parts.length} ${parties.length}`} {...choices} />
             </Sheet>
           )}
           {isLead && (
             <Sheet title="Add a joint">
-              <JointForm key={parts.length} {...shared} />
+              <AddJoint key={`${parts.length} ${parties.length}`} {...choices} />
             </Sheet>
           )}
           {mayHandOver && (
             <Sheet title="Plan a handoff">
-              <HandoffForm {...shared} />
+              <AddHandoff {...choices} />
             </Sheet>
           )}
         </div>

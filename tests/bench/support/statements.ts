@@ -1,6 +1,6 @@
-import type { DataSource, EntityManager } from 'typeorm';
+import type { DataSource } from 'typeorm';
 import { abilityFor } from '../../../shared/abilities/ability.ts';
-import { loadActor, type KnownActor } from '../../../server/policies/load-actor.ts';
+import { actorStatement, loadActor, type KnownActor } from '../../../server/policies/load-actor.ts';
 import { listStatement } from '../../../server/queries/commissions/list-commissions.ts';
 import { messagesStatement } from '../../../server/queries/threads/list-messages.ts';
 import type { Statement } from '../bare/settings.ts';
@@ -14,22 +14,15 @@ const sessionStatement = (reader: Reader): Statement => ({
   values: [reader.sessionId, Math.ceil(Date.now() / 1000)],
 });
 
-/** Runs the application's own look-up of who is asking and keeps the statement it sent. */
+/** The application's own look-up of who is asking, and its answer. */
 async function actorOf(
   db: DataSource,
   reader: Reader,
   commissionId: string | null,
 ): Promise<{ known: KnownActor; statement: Statement }> {
-  let statement: Statement | undefined;
-  const listening = {
-    query: (text: string, values: unknown[]) => {
-      statement = { text, values };
-      return db.query<unknown>(text, values);
-    },
-  };
-  const known = await loadActor(listening as unknown as EntityManager, reader.accountId, { commissionId });
-  if (!known || !statement) throw new Error('The reader is not known to the application');
-  return { known, statement };
+  const known = await loadActor(db, reader.accountId, { commissionId });
+  if (!known) throw new Error('The reader is not known to the application');
+  return { known, statement: actorStatement(reader.accountId, { commissionId }) };
 }
 
 export interface PageStatements {

@@ -6,6 +6,7 @@ import {
   type AccountView,
 } from '../../../../shared/contracts/accounts.ts';
 import type { LengthUnit } from '../../../../shared/contracts/vocabulary.ts';
+import { FormFrame } from '../../../components/form-frame.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
 import { Field } from '../../../components/ui/field.tsx';
@@ -33,13 +34,7 @@ export function HowYouRead({ me }: { me: AccountView }) {
   const { values, set, errorAt } = form;
   return (
     <Sheet title="Name and units">
-      <form
-        className="grid gap-4"
-        onSubmit={(event) => {
-          event.preventDefault();
-          form.submit();
-        }}
-      >
+      <FormFrame form={form}>
         <Field label="Name" error={errorAt('displayName')}>
           <TextInput
             value={values.displayName}
@@ -67,12 +62,12 @@ export function HowYouRead({ me }: { me: AccountView }) {
           </Button>
         </div>
         <ProblemNotice problem={form.act.problem} />
-      </form>
+      </FormFrame>
     </Sheet>
   );
 }
 
-export function PasswordSheet() {
+export function PasswordSheet({ email }: { email: string }) {
   const [current, setCurrent] = useState('');
   const [next, setNext] = useState('');
   const [done, setDone] = useState(false);
@@ -95,7 +90,9 @@ export function PasswordSheet() {
           change.run({ body: { currentPassword: current, newPassword: next } });
         }}
       >
-        <Field label="Current password">
+        {/* A password manager needs to know whose password this is. */}
+        <input type="text" autoComplete="username" value={email} readOnly hidden />
+        <Field label="Current password" error={errorAt('/body/currentPassword')}>
           <TextInput
             type="password"
             value={current}

@@ -11,7 +11,9 @@ import { Field } from '../../../components/ui/field.tsx';
 import { Notice } from '../../../components/ui/notice.tsx';
 import { Sheet } from '../../../components/ui/sheet.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
+import { announce } from '../../../components/ui/announcer.ts';
 import { useAct } from '../../../hooks/use-act.ts';
+import { saveAsFile } from '../../../lib/save-as-file.ts';
 import { keys } from '../../../lib/query-keys.ts';
 
 /** The QR code as a picture of its own: the page's policy allows no markup from a string. */
@@ -134,9 +136,22 @@ export function SecondFactorSheet({ me }: { me: AccountView }) {
           tone="brass"
           title="Keep these recovery codes"
           actions={
-            <Button variant="outline" onClick={() => void navigator.clipboard.writeText(codes.join('\n'))}>
-              Copy them
-            </Button>
+            <>
+              <Button variant="outline" onClick={() => saveAsFile('ferrule-recovery-codes.txt', codes.join('\n'))}>
+                Save them as a file
+              </Button>
+              <Button
+                variant="outline"
+                onClick={() =>
+                  void navigator.clipboard.writeText(codes.join('\n')).then(
+                    () => announce('The codes are copied.'),
+                    () => announce('The codes could not be copied; save them as a file.', 'assertive'),
+                  )
+                }
+              >
+                Copy them
+              </Button>
+            </>
           }
         >
           <p>Each works once, when the authenticator is not at hand. They are shown this one time.</p>

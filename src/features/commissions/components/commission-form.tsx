@@ -7,7 +7,8 @@ import {
   type Currency,
 } from '../../../../shared/contracts/vocabulary.ts';
 import { MINOR_DIGITS } from '../../../../shared/units/money.ts';
-import { ConflictSheet } from '../../../components/conflict-sheet.tsx';
+import { EditFormFoot } from '../../../components/edit-form-foot.tsx';
+import { FormFrame } from '../../../components/form-frame.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
 import { Checkbox } from '../../../components/ui/checkbox.tsx';
@@ -17,6 +18,8 @@ import { Select } from '../../../components/ui/select.tsx';
 import { TextArea } from '../../../components/ui/text-area.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
 import { useContractForm } from '../../../hooks/use-contract-form.ts';
+import { useEditForm } from '../../../hooks/use-edit-form.ts';
+import { minorFrom } from '../../../lib/figures.ts';
 import { keys } from '../../../lib/query-keys.ts';
 import { COMMISSION_STATE_WORDS, ROLE_WORDS } from '../../../lib/words.ts';
 
@@ -28,21 +31,16 @@ interface BriefValues extends Record<string, string> {
   currency: string;
 }
 
-const toMinor = (text: string, currency: string): number | null =>
-  text.trim() === ''
-    ? null
-    : Math.round(Number(text.trim().replace(',', '.')) * 10 ** (MINOR_DIGITS[currency as Currency] ?? 2));
-
 const toMajor = (amountMinor: number | null | undefined, currency: string): string =>
   amountMinor === null || amountMinor === undefined
     ? ''
-    : String(amountMinor / 10 ** (MINOR_DIGITS[currency as Currency] ?? 2));
+    : String(amountMinor / 10 ** MINOR_DIGITS[currency as Currency]);
 
 const briefBody = (values: BriefValues) => ({
   title: values.title,
   brief: values.brief,
   dateWanted: values.dateWanted || null,
-  budgetMinor: toMinor(values.budget, values.currency),
+  budgetMinor: values.budget.trim() === '' ? null : minorFrom(values.budget, values.currency as Currency),
   currency: values.currency as Currency,
 });
 
@@ -106,13 +104,7 @@ export function NewCommissionForm({
     onDone: (made) => onMade(made.id),
   });
   return (
-    <form
-      className="grid max-w-words gap-4"
-      onSubmit={(event) => {
-        event.preventDefault();
-        form.submit();
-      }}
-    >
+    <FormFrame form={form} className="max-w-words">
       <Field label="Lead shop" hint="It holds the contract with the client">
         <Select value={leadShopId} onChange={(event) => setLeadShopId(event.target.value)}>
           {shops.map((shop) => (
@@ -141,44 +133,42 @@ export function NewCommissionForm({
         {form.isDraft && <span className="text-note text-lead-grey">draft kept</span>}
       </div>
       <ProblemNotice problem={form.act.problem} />
-    </form>
+    </FormFrame>
   );
 }
 
 export function EditCommissionForm({ commission }: { commission: CommissionView }) {
-  const currency = commission.currency ?? 'EUR';
-  const form = useContractForm(updateCommission, {
+  const currencyOf = (record: CommissionView): string => record.currency ?? 'EUR';
+  const form = useEditForm(updateCommission, {
     name: `commission-${commission.id}`,
-    initial: {
-      title: commission.title,
-      brief: commission.brief ?? '',
-      dateWanted: commission.dateWanted ?? '',
-      budget: toMajor(commission.budgetMinor, currency),
-      currency,
-      state: commission.state,
-      // Part of what was typed: a draft knows the revision it began from, over a reload too.
-      revision: commission.revision.toString(),
-    },
-    toInput: (values) => ({
-      params: { commissionId: commission.id },
-      body: { revision: Number(values.revision), ...briefBody(values), state: values.state },
+    record: commission,
+    toValues: (record: CommissionView): BriefValues & { state: string } => ({
+      title: record.title,
+      brief: record.brief ?? '',
+      dateWanted: record.dateWanted ?? '',
+      budget: toMajor(record.budgetMinor, currencyOf(record)),
+      currency: currencyOf(record),
+      state: record.state,
     }),
+    toInput: (values, revision) => ({
+      params: { commissionId: commission.id },
+      body: { revision, ...briefBody(values), state: values.state as CommissionState },
+    }),
+    edited: [
+      { name: 'title', label: 'Name' },
+      { name: 'brief', label: 'Brief' },
+      { name: 'dateWanted', label: 'Date wanted' },
+      { name: 'budget', label: 'Budget' },
+      { name: 'currency', label: 'Currency' },
+      { name: 'state', label: 'State', words: (state) => COMMISSION_STATE_WORDS[state as CommissionState] },
+    ],
     stale: () => [keys.commission(commission.id), keys.commissions.lists()],
   });
-  const theirs =
-    form.act.problem?.code === 'stale-revision' ? (form.act.problem.problem.current as CommissionView) : null;
-  const { values, set } = form;
   return (
-    <form
-      className="grid max-w-words gap-4"
-      onSubmit={(event) => {
-        event.preventDefault();
-        form.submit();
-      }}
-    >
-      <BriefFields values={values} set={(name, value) => form.patch({ [name]: value })} errorAt={form.errorAt} />
-      <Field label="State">
-        <Select value={values.state} onChange={(event) => set('state', event.target.value as CommissionState)}>
+    <FormFrame form={form} className="max-w-words">
+      <BriefFields values={form.values} set={form.set} errorAt={form.errorAt} />
+      <Field label="State" error={form.errorAt('state')}>
+        <Select value={form.values.state} onChange={(event) => form.set('state', event.target.value)}>
           {COMMISSION_STATES.map((state) => (
             <option key={state} value={state}>
               {COMMISSION_STATE_WORDS[state]}
@@ -186,74 +176,7 @@ export function EditCommissionForm({ commission }: { commission: CommissionView 
           ))}
         </Select>
       </Field>
-      <div className="flex flex-wrap items-center gap-3">
-        <Button type="submit" busy={form.act.pending} disabled={!form.isDraft}>
-          Save the changes
-        </Button>
-        {form.isDraft && (
-          <>
-            <span className="text-note text-lead-grey">draft kept</span>
-            <Button variant="quiet" onClick={form.forget}>
-              Leave it as it was
-            </Button>
-          </>
-        )}
-      </div>
-      {theirs ? (
-        <ConflictSheet
-          fields={[
-            {
-              name: 'title',
-              label: 'Name',
-              mine: values.title,
-              theirs: theirs.title,
-              same: values.title === theirs.title,
-              takeTheirs: () => set('title', theirs.title),
-            },
-            {
-              name: 'brief',
-              label: 'Brief',
-              mine: values.brief,
-              theirs: theirs.brief ?? '',
-              same: values.brief === (theirs.brief ?? ''),
-              takeTheirs: () => set('brief', theirs.brief ?? ''),
-            },
-            {
-              name: 'dateWanted',
-              label: 'Date wanted',
-              mine: values.dateWanted || 'none',
-              theirs: theirs.dateWanted ?? 'none',
-              same: values.dateWanted === (theirs.dateWanted ?? ''),
-              takeTheirs: () => set('dateWanted', theirs.dateWanted ?? ''),
-            },
-            {
-              name: 'budget',
-              label: 'Budget',
-              mine: values.budget || 'none',
-              theirs: toMajor(theirs.budgetMinor, currency) || 'none',
-              same: values.budget === toMajor(theirs.budgetMinor, currency),
-              takeTheirs: () => set('budget', toMajor(theirs.budgetMinor, currency)),
-            },
-            {
-              name: 'state',
-              label: 'State',
-              mine: values.state,
-              theirs: theirs.state,
-              same: values.state === theirs.state,
-              takeTheirs: () => set('state', theirs.state),
-            },
-          ]}
-          onSaveMine={() => {
-            form.patch({ revision: theirs.revision.toString() });
-            form.act.run({
-              params: { commissionId: commission.id },
-              body: { revision: theirs.revision, ...briefBody(values), state: values.state },
-            });
-          }}
-        />
-      ) : (
-        <ProblemNotice problem={form.act.problem} />
-      )}
-    </form>
+      <EditFormFoot form={form} save="Save the changes" />
+    </FormFrame>
   );
 }

@@ -1,7 +1,7 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
+import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
-import type { LegView } from '../../../../shared/contracts/parts-and-legs.ts';
-import { moveLeg } from '../../../../shared/contracts/parts-and-legs.ts';
+import { moveLeg, type LegView, type PartView } from '../../../../shared/contracts/parts-and-legs.ts';
 import { mayDo } from '../../../../shared/abilities/ability.ts';
 import { standingFor } from '../../../../shared/engines/standing/standing.ts';
 import { shortDay } from '../../../../shared/units/calendar-day.ts';
@@ -17,17 +17,10 @@ import { keys } from '../../../lib/query-keys.ts';
 import { commissionQueries } from '../../../lib/queries/commissions.ts';
 import { handoffQueries } from '../../../lib/queries/handoffs.ts';
 import { jointQueries, reportQueries } from '../../../lib/queries/joints.ts';
-import { LEG_KIND_WORDS, REPORT_STATE_STAMPS } from '../../../lib/words.ts';
+import { LEG_KIND_WORDS, LEG_STATE_STAMPS, REPORT_STATE_STAMPS } from '../../../lib/words.ts';
 
-const LEG_STATE_WORDS: Readonly<Record<LegView['state'], string>> = {
-  planned: 'Planned',
-  'under-way': 'Under way',
-  finished: 'Finished',
-  dropped: 'Dropped',
-};
-
-/** Parts and who holds each. */
-export function WhoHasWhat({ commissionId }: { commissionId: string }) {
+/** Parts and who holds each, with what may be done to each by the reader. */
+export function WhoHasWhat({ commissionId, actsOf }: { commissionId: string; actsOf?: (part: PartView) => ReactNode }) {
   const { data: parts } = useSuspenseQuery(commissionQueries.parts(commissionId));
   const { nameOf } = usePartyBook(commissionId);
   return (
@@ -45,6 +38,7 @@ export function WhoHasWhat({ commissionId }: { commissionId: string }) {
                 {nameOf(part.holderPartyId)}{' '}
                 <span className="text-note text-lead-grey">since {shortDay(part.holderSince)}</span>
               </dd>
+              {actsOf && <dd className="col-span-2 border-b border-hairline">{actsOf(part)}</dd>}
             </div>
           ))}
         </dl>
@@ -103,9 +97,7 @@ export function OwnLegs({ commissionId, today }: { commissionId: string; today: 
             <p className="flex flex-wrap items-center gap-2">
               <span className="font-semibold">{leg.title}</span>
               <span className="text-note text-lead-grey">{LEG_KIND_WORDS[leg.kind]}</span>
-              <Stamp tone={leg.state === 'finished' ? 'verdigris' : leg.state === 'under-way' ? 'brass' : 'neutral'}>
-                {LEG_STATE_WORDS[leg.state]}
-              </Stamp>
+              <Stamp tone={LEG_STATE_STAMPS[leg.state].tone}>{LEG_STATE_STAMPS[leg.state].words}</Stamp>
               {leg.held && <Stamp tone="oxide">Held since {shortDay(leg.held.sinceDay)}</Stamp>}
             </p>
             {leg.privateNote && <p className="text-note text-lead-grey">Own note: {leg.privateNote}</p>}

@@ -1,7 +1,7 @@
-import { useState } from 'react';
 import { answerFitReport, type FitReportDetail } from '../../../../shared/contracts/fit-reports.ts';
 import type { Currency, JointSide } from '../../../../shared/contracts/vocabulary.ts';
-import { parseLength } from '../../../../shared/units/length.ts';
+import { parseLength, type LengthReading } from '../../../../shared/units/length.ts';
+import { FormFrame } from '../../../components/form-frame.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
 import { Caution } from '../../../components/ui/caution.tsx';
@@ -10,9 +10,9 @@ import { Field } from '../../../components/ui/field.tsx';
 import { Select } from '../../../components/ui/select.tsx';
 import { TextArea } from '../../../components/ui/text-area.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
-import { useAct } from '../../../hooks/use-act.ts';
-import { useDraft } from '../../../hooks/use-draft.ts';
+import { useContractForm } from '../../../hooks/use-contract-form.ts';
 import { usePartyBook } from '../../../hooks/use-party-names.ts';
+import { figureFrom, minorFrom, optionalFigureFrom } from '../../../lib/figures.ts';
 import { staleAfterReport } from './report-acts.tsx';
 
 export interface AnswerFormProps {
@@ -26,7 +26,19 @@ export interface AnswerFormProps {
   mine: ReadonlySet<string>;
 }
 
-const number = (text: string): number => Number(text.trim().replace(',', '.'));
+type AnswerValues = Record<
+  'method' | 'side' | 'remove' | 'over' | 'risk' | 'where' | 'cost' | 'bearer' | 'days',
+  string
+> & { shows: boolean };
+
+/** "0" is an answer too: nothing comes off. */
+const removalOf = (text: string): LengthReading =>
+  Number(text.replace(',', '.')) === 0 && text.trim() !== '' ? { ok: true, valueMm: 0, unit: 'mm' } : parseLength(text);
+
+const removalUm = (text: string): number => {
+  const removal = removalOf(text);
+  return removal.ok ? Math.round(removal.valueMm * 1e6) / 1e3 : Number.NaN;
+};
 
 /** The rework note: what will be done, where it shows, at whose cost. Everything typed is kept until it is sent. */
 export function AnswerForm({
@@ -39,60 +51,52 @@ export function AnswerForm({
   mine,
 }: AnswerFormProps) {
   const { report } = detail;
-  const name = `answer-${report.id}`;
   const { parties } = usePartyBook(commissionId);
-  const [method, setMethod, forgetMethod] = useDraft(`${name}-method`, '');
-  const [remove, setRemove, forgetRemove] = useDraft(
-    `${name}-remove`,
-    suggestedUm === null ? '' : (suggestedUm / 1000).toFixed(3),
-  );
-  const [over, setOver] = useState(suggestedOverMm === null ? '' : String(suggestedOverMm));
-  const [risk, setRisk, forgetRisk] = useDraft(`${name}-risk`, '');
-  const [where, setWhere, forgetWhere] = useDraft(`${name}-where`, '');
-  const [side, setSide] = useState<JointSide>('shaft');
-  const [shows, setShows] = useState(where !== '');
-  const [cost, setCost] = useState('0');
-  const [bearer, setBearer] = useState(parties.find((party) => mine.has(party.id))?.id ?? '');
-  const [days, setDays] = useState('0');
-  const answer = useAct(answerFitReport, {
+  const form = useContractForm<typeof answerFitReport, AnswerValues>(answerFitReport, {
+    name: `answer-${report.id}`,
+    initial: {
+      method: '',
+      side: 'shaft',
+      remove: suggestedUm === null ? '' : (suggestedUm / 1000).toFixed(3),
+      over: suggestedOverMm === null ? '' : String(suggestedOverMm),
+      risk: '',
+      shows: false,
+      where: '',
+      cost: '0',
+      bearer: parties.find((party) => mine.has(party.id))?.id ?? '',
+      days: '0',
+    },
+    toInput: (values) => ({
+      params: { commissionId, reportId: report.id },
+      body: {
+        revision: report.revision,
+        method: values.method,
+        cutSide: values.side as JointSide,
+        removeOnDiameterUm: removalUm(values.remove),
+        overLengthMm: optionalFigureFrom(values.over),
+        risk: values.risk,
+        shows: values.shows,
+        whereItShows: values.shows ? values.where : '',
+        costMinor: minorFrom(values.cost, currency),
+        currency,
+        costBorneByPartyId: values.bearer || null,
+        effectDays: figureFrom(values.days),
+      },
+    }),
     stale: () => staleAfterReport(commissionId, report.id),
-    onDone: () => [forgetMethod, forgetRemove, forgetRisk, forgetWhere].forEach((forget) => forget()),
   });
-  const removal = remove.trim() === '0' ? { ok: true as const, valueMm: 0 } : parseLength(remove);
-  const errorAt = (pointer: string): string | undefined =>
-    answer.problem?.problem.errors?.find((error) => error.pointer === `/body/${pointer}`)?.message;
+  const { values, set, errorAt, act } = form;
+  const { method, side, remove, over, risk, shows, where, cost, bearer, days } = values;
+  const removal = removalOf(remove);
 
   return (
-    <form
-      className="grid gap-4"
-      onSubmit={(event) => {
-        event.preventDefault();
-        if (!removal.ok) return;
-        answer.run({
-          params: { commissionId, reportId: report.id },
-          body: {
-            revision: report.revision,
-            method,
-            cutSide: side,
-            removeOnDiameterUm: Math.round(removal.valueMm * 1e6) / 1e3,
-            overLengthMm: over.trim() === '' ? null : number(over),
-            risk,
-            shows,
-            whereItShows: shows ? where : '',
-            costMinor: Math.round(number(cost) * 100),
-            currency,
-            costBorneByPartyId: bearer || null,
-            effectDays: number(days),
-          },
-        });
-      }}
-    >
+    <FormFrame form={form}>
       <Field label="What will be done" required error={errorAt('method')}>
-        <TextArea value={method} required maxLength={4000} onChange={(event) => setMethod(event.target.value)} />
+        <TextArea value={method} required maxLength={4000} onChange={(event) => set('method', event.target.value)} />
       </Field>
       <div className="grid gap-4 sm:grid-cols-3">
         <Field label="Which part is cut">
-          <Select value={side} onChange={(event) => setSide(event.target.value as JointSide)}>
+          <Select value={side} onChange={(event) => set('side', event.target.value)}>
             <option value="shaft">{sideNames.shaft}</option>
             <option value="hole">{sideNames.hole}</option>
           </Select>
@@ -102,32 +106,32 @@ export function AnswerForm({
           hint="In mm, or with its unit, as 0.118 or 0.0046 in"
           error={remove !== '' && !removal.ok ? removal.message : errorAt('removeOnDiameterUm')}
         >
-          <TextInput value={remove} required onChange={(event) => setRemove(event.target.value)} />
+          <TextInput value={remove} required onChange={(event) => set('remove', event.target.value)} />
         </Field>
         <Field label="Over a length of, mm" optional error={errorAt('overLengthMm')}>
-          <TextInput inputMode="decimal" value={over} onChange={(event) => setOver(event.target.value)} />
+          <TextInput inputMode="decimal" value={over} onChange={(event) => set('over', event.target.value)} />
         </Field>
       </div>
       <Field label="What could go wrong" optional>
-        <TextArea value={risk} maxLength={2000} onChange={(event) => setRisk(event.target.value)} />
+        <TextArea value={risk} maxLength={2000} onChange={(event) => set('risk', event.target.value)} />
       </Field>
       <Checkbox
         label="It will show when the joint is closed"
         hint="Then the client is asked before work may start"
         checked={shows}
-        onChange={(event) => setShows(event.target.checked)}
+        onChange={(event) => set('shows', event.target.checked)}
       />
       {shows && (
         <Field label="Where it will show, in words for the client" required error={errorAt('whereItShows')}>
-          <TextInput value={where} required maxLength={500} onChange={(event) => setWhere(event.target.value)} />
+          <TextInput value={where} required maxLength={500} onChange={(event) => set('where', event.target.value)} />
         </Field>
       )}
       <div className="grid gap-4 sm:grid-cols-3">
         <Field label={`Cost, ${currency}`} error={errorAt('costMinor')}>
-          <TextInput inputMode="decimal" value={cost} onChange={(event) => setCost(event.target.value)} />
+          <TextInput inputMode="decimal" value={cost} onChange={(event) => set('cost', event.target.value)} />
         </Field>
         <Field label="Borne by">
-          <Select value={bearer} onChange={(event) => setBearer(event.target.value)}>
+          <Select value={bearer} onChange={(event) => set('bearer', event.target.value)}>
             <option value="">Not settled</option>
             {parties
               .filter((party) => !party.roles.includes('guest'))
@@ -139,7 +143,7 @@ export function AnswerForm({
           </Select>
         </Field>
         <Field label="Working days it takes" error={errorAt('effectDays')}>
-          <TextInput inputMode="decimal" value={days} onChange={(event) => setDays(event.target.value)} />
+          <TextInput inputMode="decimal" value={days} onChange={(event) => set('days', event.target.value)} />
         </Field>
       </div>
       <Caution>
@@ -147,11 +151,12 @@ export function AnswerForm({
         machine maker's instructions and your local rules.
       </Caution>
       <div>
-        <Button type="submit" busy={answer.pending}>
+        <Button type="submit" busy={act.pending}>
           Answer with this rework note
         </Button>
+        {form.isDraft && <span className="ml-3 text-note text-lead-grey">draft kept</span>}
       </div>
-      <ProblemNotice problem={answer.problem} />
-    </form>
+      <ProblemNotice problem={act.problem} />
+    </FormFrame>
   );
 }

@@ -10,6 +10,7 @@ import { Select } from '../../../components/ui/select.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
 import { useAct } from '../../../hooks/use-act.ts';
 import { useDraft } from '../../../hooks/use-draft.ts';
+import { figureFrom, optionalFigureFrom } from '../../../lib/figures.ts';
 import { keys } from '../../../lib/query-keys.ts';
 
 export interface ReadingEntryProps {
@@ -77,7 +78,6 @@ export function ReadingEntry({
     setDraft([...texts, ''].join('\n'));
     requestAnimationFrame(() => list.current?.querySelector<HTMLInputElement>('li:last-child input')?.focus());
   };
-  const numberOrNull = (text: string): number | null => (text.trim() === '' ? null : Number(text.replace(',', '.')));
 
   return (
     <form
@@ -89,10 +89,10 @@ export function ReadingEntry({
           body: {
             side,
             reportId,
-            resolutionUm: Number(resolution.replace(',', '.')),
+            resolutionUm: figureFrom(resolution),
             gauge: gauge.trim() || null,
-            temperatureC: numberOrNull(temperature),
-            humidityPct: numberOrNull(humidity),
+            temperatureC: optionalFigureFrom(temperature),
+            humidityPct: optionalFigureFrom(humidity),
             readings: filled.map((text) => ({ text, unit })),
           },
         });

@@ -1,14 +1,14 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { useState } from 'react';
 import { inviteParty, removeParty, withdrawInvitation } from '../../../../shared/contracts/commissions.ts';
 import { GUEST_SIGHTS, type GuestSight } from '../../../../shared/contracts/vocabulary.ts';
 import { mayDo } from '../../../../shared/abilities/ability.ts';
 import { addDays, dayMonthYear } from '../../../../shared/units/calendar-day.ts';
+import { AskFirst } from '../../../components/ask-first.tsx';
+import { FormFrame } from '../../../components/form-frame.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
 import { Checkbox } from '../../../components/ui/checkbox.tsx';
 import { DateInput } from '../../../components/ui/date-input.tsx';
-import { Dialog } from '../../../components/ui/dialog.tsx';
 import { Field } from '../../../components/ui/field.tsx';
 import { Select } from '../../../components/ui/select.tsx';
 import { Sheet } from '../../../components/ui/sheet.tsx';
@@ -52,13 +52,7 @@ function Invite({ commissionId, today }: { commissionId: string; today: string }
   const toggle = (list: readonly string[], item: string, on: boolean): string[] =>
     on ? [...list, item] : list.filter((one) => one !== item);
   return (
-    <form
-      className="grid gap-4"
-      onSubmit={(event) => {
-        event.preventDefault();
-        form.submit();
-      }}
-    >
+    <FormFrame form={form}>
       <Field label="Whom">
         <Select value={values.kind} onChange={(event) => set('kind', event.target.value)}>
           <option value="shop">A shop</option>
@@ -111,42 +105,23 @@ function Invite({ commissionId, today }: { commissionId: string; today: string }
         </Button>
       </div>
       <ProblemNotice problem={form.act.problem} />
-    </form>
+    </FormFrame>
   );
 }
 
-/** Takes a party out, after a word about what that means. */
 function RemoveParty({ commissionId, partyId, name }: { commissionId: string; partyId: string; name: string }) {
-  const [open, setOpen] = useState(false);
-  const remove = useAct(removeParty, { stale: () => [keys.parties.list(commissionId)], onDone: () => setOpen(false) });
+  const remove = useAct(removeParty, { stale: () => [keys.parties.list(commissionId)] });
   return (
-    <>
-      <Button variant="quiet" onClick={() => setOpen(true)}>
-        Take out
-      </Button>
-      <Dialog
-        open={open}
-        onOpenChange={setOpen}
-        title={`Take ${name} out of this commission`}
-        description="They lose sight of it at once. What they wrote and did stays."
-        actions={
-          <>
-            <Button
-              variant="danger"
-              busy={remove.pending}
-              onClick={() => remove.run({ params: { commissionId, partyId } })}
-            >
-              Take {name} out
-            </Button>
-            <Button variant="outline" onClick={() => setOpen(false)}>
-              Keep them
-            </Button>
-          </>
-        }
-      >
-        <ProblemNotice problem={remove.problem} />
-      </Dialog>
-    </>
+    <AskFirst
+      label="Take out"
+      title={`Take ${name} out of this commission`}
+      description="They lose sight of it at once. What they wrote and did stays."
+      act={`Take ${name} out`}
+      keep="Keep them"
+      pending={remove.pending}
+      problem={remove.problem}
+      onAct={() => remove.run({ params: { commissionId, partyId } })}
+    />
   );
 }
 

@@ -1,5 +1,6 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { createShop, type ShopView } from '../../../../shared/contracts/shops.ts';
+import { FormFrame } from '../../../components/form-frame.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
 import { DataTable, type Column } from '../../../components/ui/data-table.tsx';
@@ -45,13 +46,7 @@ export function AllShopsPage() {
         }
         side={
           <Sheet title="Open a shop" note="Its owner comes by a letter with a link">
-            <form
-              className="grid gap-4"
-              onSubmit={(event) => {
-                event.preventDefault();
-                form.submit();
-              }}
-            >
+            <FormFrame form={form}>
               <Field label="Name" error={errorAt('name')}>
                 <TextInput value={values.name} onChange={(event) => set('name', event.target.value)} />
               </Field>
@@ -78,7 +73,7 @@ export function AllShopsPage() {
                 </Button>
               </div>
               <ProblemNotice problem={form.act.problem} />
-            </form>
+            </FormFrame>
           </Sheet>
         }
       />

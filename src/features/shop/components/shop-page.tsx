@@ -2,7 +2,8 @@ import { useSuspenseQuery } from '@tanstack/react-query';
 import * as contracts from '../../../../shared/contracts/shops.ts';
 import type { ShopView } from '../../../../shared/contracts/shops.ts';
 import { SHOP_ROLES, SHOP_TINTS, type ShopRole, type ShopTint } from '../../../../shared/contracts/vocabulary.ts';
-import { ConflictSheet } from '../../../components/conflict-sheet.tsx';
+import { EditFormFoot } from '../../../components/edit-form-foot.tsx';
+import { FormFrame } from '../../../components/form-frame.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
 import { Field } from '../../../components/ui/field.tsx';
@@ -10,50 +11,34 @@ import { Page, PageHeading, TwoColumns } from '../../../components/ui/page.tsx';
 import { Select } from '../../../components/ui/select.tsx';
 import { Sheet } from '../../../components/ui/sheet.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
-import { useAct } from '../../../hooks/use-act.ts';
 import { useContractForm } from '../../../hooks/use-contract-form.ts';
+import { useEditForm } from '../../../hooks/use-edit-form.ts';
 import { keys } from '../../../lib/query-keys.ts';
 import { shopQueries } from '../../../lib/queries/shops.ts';
-
-const ROLE_WORDS: Readonly<Record<ShopRole, string>> = { owner: 'Owner', hand: 'Hand', bookkeeper: 'Bookkeeper' };
-
-type ShopField = 'name' | 'craft' | 'country' | 'timeZone' | 'tint';
+import { SHOP_ROLE_WORDS } from '../../../lib/words.ts';
+import { ShopPeople } from './shop-people.tsx';
 
 function ShopForm({ shop }: { shop: ShopView }) {
-  const form = useContractForm(contracts.updateShop, {
+  const form = useEditForm(contracts.updateShop, {
     name: `shop-${shop.id}`,
-    initial: {
-      name: shop.name,
-      craft: shop.craft,
-      country: shop.country,
-      timeZone: shop.timeZone,
-      tint: shop.tint,
-      revision: shop.revision.toString(),
-    },
-    toInput: (values) => ({
+    record: shop,
+    toValues: ({ name, craft, country, timeZone, tint }: ShopView) => ({ name, craft, country, timeZone, tint }),
+    toInput: ({ name, craft, country, timeZone, tint }, revision) => ({
       params: { shopId: shop.id },
-      body: { ...values, revision: Number(values.revision) },
+      body: { revision, name, craft, country, timeZone, tint },
     }),
+    edited: [
+      { name: 'name', label: 'Name' },
+      { name: 'craft', label: 'Craft' },
+      { name: 'country', label: 'Country' },
+      { name: 'timeZone', label: 'Time zone' },
+      { name: 'tint', label: 'Tint' },
+    ],
     stale: () => [keys.shops.detail(shop.id), keys.me()],
   });
   const { values, set, errorAt } = form;
-  const theirs = form.act.problem?.code === 'stale-revision' ? (form.act.problem.problem.current as ShopView) : null;
-  const line = (name: ShopField, label: string) => ({
-    name,
-    label,
-    mine: values[name],
-    theirs: theirs?.[name] ?? '',
-    same: values[name] === theirs?.[name],
-    takeTheirs: () => set(name, theirs?.[name] ?? ''),
-  });
   return (
-    <form
-      className="grid gap-4"
-      onSubmit={(event) => {
-        event.preventDefault();
-        form.submit();
-      }}
-    >
+    <FormFrame form={form}>
       <Field label="Name" error={errorAt('name')}>
         <TextInput value={values.name} maxLength={80} onChange={(event) => set('name', event.target.value)} />
       </Field>
@@ -81,97 +66,8 @@ function ShopForm({ shop }: { shop: ShopView }) {
           </Select>
         </Field>
       </div>
-      <div>
-        <Button type="submit" busy={form.act.pending} disabled={!form.isDraft}>
-          Save the shop
-        </Button>
-      </div>
-      {theirs ? (
-        <ConflictSheet
-          fields={[
-            line('name', 'Name'),
-            line('craft', 'Craft'),
-            line('country', 'Country'),
-            line('timeZone', 'Time zone'),
-            line('tint', 'Tint'),
-          ]}
-          onSaveMine={() => {
-            form.patch({ revision: theirs.revision.toString() });
-            form.act.run({
-              params: { shopId: shop.id },
-              body: { ...values, revision: theirs.revision },
-            });
-          }}
-        />
-      ) : (
-        <ProblemNotice problem={form.act.problem} />
-      )}
-    </form>
-  );
-}
-
-function People({ shopId, isOwner }: { shopId: string; isOwner: boolean }) {
-  const { data } = useSuspenseQuery(shopQueries.members(shopId));
-  const stale = () => [keys.shops.members(shopId)];
-  const change = useAct(contracts.changeShopMember, { stale });
-  const remove = useAct(contracts.removeShopMember, { stale });
-  const withdraw = useAct(contracts.withdrawShopInvitation, { stale });
-  return (
-    <Sheet title="People">
-      <ul>
-        {data.members.map((member) => (
-          <li
-            key={member.accountId}
-            className="flex flex-wrap items-center justify-between gap-3 border-b border-hairline py-3"
-          >
-            <span>
-              <span className="font-semibold">{member.displayName}</span>{' '}
-              <span className="text-note text-lead-grey">{member.email}</span>
-            </span>
-            {isOwner ? (
-              <span className="flex flex-wrap items-center gap-2">
-                <Select
-                  aria-label={`What ${member.displayName} does`}
-                  value={member.role}
-                  onChange={(event) =>
-                    change.run({
-                      params: { shopId, accountId: member.accountId },
-                      body: { role: event.target.value as ShopRole },
-                    })
-                  }
-                >
-                  {SHOP_ROLES.map((role) => (
-                    <option key={role} value={role}>
-                      {ROLE_WORDS[role]}
-                    </option>
-                  ))}
-                </Select>
-                <Button variant="quiet" onClick={() => remove.run({ params: { shopId, accountId: member.accountId } })}>
-                  Take out
-                </Button>
-              </span>
-            ) : (
-              <span>{ROLE_WORDS[member.role]}</span>
-            )}
-          </li>
-        ))}
-        {data.invitations.map((invitation) => (
-          <li
-            key={invitation.id}
-            className="flex flex-wrap items-center justify-between gap-3 border-b border-hairline py-3"
-          >
-            <span>
-              {invitation.email}{' '}
-              <span className="text-note text-lead-grey">invited as {ROLE_WORDS[invitation.role].toLowerCase()}</span>
-            </span>
-            <Button variant="quiet" onClick={() => withdraw.run({ params: { shopId, invitationId: invitation.id } })}>
-              Take it back
-            </Button>
-          </li>
-        ))}
-      </ul>
-      <ProblemNotice problem={change.problem ?? remove.problem ?? withdraw.problem} />
-    </Sheet>
+      <EditFormFoot form={form} save="Save the shop" />
+    </FormFrame>
   );
 }
 
@@ -184,13 +80,7 @@ function InviteMember({ shopId }: { shopId: string }) {
   });
   return (
     <Sheet title="Invite a person">
-      <form
-        className="grid gap-4"
-        onSubmit={(event) => {
-          event.preventDefault();
-          form.submit();
-        }}
-      >
+      <FormFrame form={form}>
         <Field label="E-mail" error={form.errorAt('email')}>
           <TextInput
             type="email"
@@ -203,7 +93,7 @@ function InviteMember({ shopId }: { shopId: string }) {
           <Select value={form.values.role} onChange={(event) => form.set('role', event.target.value)}>
             {SHOP_ROLES.map((role) => (
               <option key={role} value={role}>
-                {ROLE_WORDS[role]}
+                {SHOP_ROLE_WORDS[role]}
               </option>
             ))}
           </Select>
@@ -214,7 +104,7 @@ function InviteMember({ shopId }: { shopId: string }) {
           </Button>
         </div>
         <ProblemNotice problem={form.act.problem} />
-      </form>
+      </FormFrame>
     </Sheet>
   );
 }
@@ -234,7 +124,7 @@ export function ShopPage({ shopId }: { shopId: string }) {
                 <ShopForm shop={shop} />
               </Sheet>
             )}
-            <People shopId={shopId} isOwner={isOwner} />
+            <ShopPeople shopId={shopId} shopName={shop.name} isOwner={isOwner} />
           </div>
         }
         side={
