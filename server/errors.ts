@@ -87,7 +87,7 @@ function asAppError(thrown: unknown): AppError {
   if (typeof code === 'string' && OUTAGE.has(code))
     return new AppError(
       'busy',
-      'Ferrule can not reach its database just now. Nothing was saved; try again in a moment.',
+      'Ferrule cannot reach its database just now. Nothing was saved; try again in a moment.',
       { retryAfterS: 2 },
     );
   const status = (thrown as { status?: unknown } | null)?.status;

@@ -88,6 +88,7 @@ export class Hub {
     this.#forgetHandshake(socket);
     this.#on(socket, 'thread.enter', async ({ commissionId, threadId }) => {
       if (!(await mayReadThread(this.#services.db, socket.data.accountId, commissionId, threadId))) return 'not-found';
+      if (!socket.connected) return 'not-connected';
       await socket.join(threadRoom(threadId));
       this.#presence.enter(threadId, socket.id, socket.data);
       this.#tellPresence(threadId);
@@ -115,9 +116,13 @@ export class Hub {
     name: N,
     act: (event: ReturnType<(typeof CLIENT_EVENTS)[N]['parse']>) => Promise<string | null>,
   ): void {
-    const listener = (raw: unknown, acknowledge?: (answer: Acknowledgement) => void): void => {
+    // Both come from the other side: a payload of any kind, and what may be no function at all.
+    const listener = (raw: unknown, acknowledge?: unknown): void => {
       const parsed = CLIENT_EVENTS[name].safeParse(raw);
-      const reply = (code: string | null): void => acknowledge?.(code === null ? { ok: true } : { ok: false, code });
+      const reply = (code: string | null): void => {
+        const answer: Acknowledgement = code === null ? { ok: true } : { ok: false, code };
+        if (typeof acknowledge === 'function') (acknowledge as (given: Acknowledgement) => void)(answer);
+      };
       if (!parsed.success) return reply('input-invalid');
       act(parsed.data as never).then(reply, (error: unknown) => {
         this.#services.log.warn({ err: error, name }, 'socket event failed');

@@ -113,7 +113,7 @@ const rangeInOrder = (range: { clearanceMinUm?: number | undefined; clearanceMax
   range.clearanceMinUm === undefined ||
   range.clearanceMaxUm === undefined ||
   range.clearanceMinUm <= range.clearanceMaxUm;
-const rangeMessage = { error: 'The least clearance can not be above the greatest', path: ['clearanceMinUm'] };
+const rangeMessage = { error: 'The least clearance cannot be above the greatest', path: ['clearanceMinUm'] };
 const partsDiffer = (parts: { holePartId?: string | undefined; shaftPartId?: string | undefined }) =>
   parts.holePartId === undefined || parts.holePartId !== parts.shaftPartId;
 const partsMessage = { error: 'A joint is between two parts', path: ['shaftPartId'] };

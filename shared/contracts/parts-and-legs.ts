@@ -106,7 +106,7 @@ const inOrder = (days: {
   badDays?: number | undefined;
 }) => (days.hopefulDays ?? 0) <= (days.likelyDays ?? Infinity) && (days.likelyDays ?? 0) <= (days.badDays ?? Infinity);
 const orderMessage = {
-  error: 'Hopeful can not be longer than likely, nor likely longer than bad',
+  error: 'Hopeful cannot be longer than likely, nor likely longer than bad',
   path: ['likelyDays'],
 };
 

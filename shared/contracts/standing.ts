@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { inCommission, instant, isoDay, pageQuery, uuid } from './common.ts';
 import { defineRoute, nothing } from './route.ts';
-import { LEG_KINDS, LEG_STATES, PARTY_ROLES } from './vocabulary.ts';
+import { COMMISSION_STATES, LEG_KINDS, LEG_STATES, PARTY_ROLES } from './vocabulary.ts';
 
 const dayRange = z.object({ fromDay: isoDay, toDay: isoDay });
 
@@ -127,6 +127,26 @@ export const getBench = defineRoute({
     moved: z.array(movedView),
     lastHereAt: instant.nullable(),
     unreadThreads: z.int(),
+    /** The newest of them. */
+    unread: z.array(
+      z.object({
+        threadId: uuid,
+        commissionId: uuid,
+        commissionTitle: z.string(),
+        title: z.string(),
+        messages: z.int(),
+      }),
+    ),
+    /** Open commissions in which the reader is the client. */
+    yourPieces: z.array(
+      z.object({
+        commissionId: uuid,
+        title: z.string(),
+        code: z.string(),
+        leadName: z.string(),
+        state: z.enum(COMMISSION_STATES),
+      }),
+    ),
     roles: z.array(z.enum(PARTY_ROLES)),
   }),
   problems: [],

@@ -10,7 +10,7 @@ export const PROBLEMS = {
   'origin-refused': { status: 403, title: 'This request did not come from Ferrule' },
   'not-found': { status: 404, title: 'There is nothing here for you' },
   'stale-revision': { status: 409, title: 'Someone saved this after you opened it' },
-  'not-in-this-state': { status: 409, title: 'This can not be done as things stand' },
+  'not-in-this-state': { status: 409, title: 'This cannot be done as things stand' },
   'already-there': { status: 409, title: 'That is already there' },
   'idempotency-in-progress': { status: 409, title: 'The same request is still being worked on' },
   'link-expired': { status: 410, title: 'This link has been used, withdrawn or has expired' },

@@ -34,7 +34,7 @@ export function parseLength(typed: string, unitHint: LengthUnit = 'mm'): LengthR
   if (fraction) {
     if (mark?.startsWith('m')) return refuse('unreadable', `${typed.trim()} is a fraction in mm; fractions are inches`);
     const [, whole = '0', over = '0', under = '0'] = fraction;
-    if (Number(under) === 0) return refuse('zero-denominator', 'A fraction can not be over zero');
+    if (Number(under) === 0) return refuse('zero-denominator', 'A fraction cannot be over zero');
     return positive((Number(whole) + Number(over) / Number(under)) * MM_PER_INCH, 'inch-fraction');
   }
   if (/[.,].*[.,]/.test(bare))
@@ -92,3 +92,7 @@ export function formatLength(valueMm: number, unit: LengthUnit): string {
   const { text, errorUm } = nearestFraction(valueMm);
   return Math.abs(errorUm) < 0.5 ? text : `${text} ${errorUm > 0 ? '+' : MINUS} ${Math.abs(errorUm).toFixed(0)} µm`;
 }
+
+/** A clearance or a removal in the reader's unit; nobody reads such small ones in fractions, so they are decimal inches there too. */
+export const formatDifference = (valueUm: number, unit: LengthUnit): string =>
+  unit === 'mm' ? formatMm(valueUm / 1000) : `${withSign(valueUm / 1000 / MM_PER_INCH, 4)} in`;

@@ -1,18 +1,21 @@
 import { QueryClientProvider } from '@tanstack/react-query';
-import { RouterProvider } from 'react-router-dom';
+import { BrowserRouter } from 'react-router-dom';
 import { LiveRegion } from '../components/ui/live-region.tsx';
 import { createQueryClient } from '../lib/query-client.ts';
+import { fetchPagesOf } from './pages.ts';
 import { followRealtime } from './realtime-invalidation.ts';
-import { createRouter } from './router.tsx';
+import { Router } from './router.tsx';
 
 const queryClient = createQueryClient();
-const router = createRouter(queryClient);
 followRealtime(queryClient);
+fetchPagesOf(location.pathname);
 
 export function App() {
   return (
     <QueryClientProvider client={queryClient}>
-      <RouterProvider router={router} />
+      <BrowserRouter>
+        <Router />
+      </BrowserRouter>
       <LiveRegion />
     </QueryClientProvider>
   );

@@ -3,20 +3,23 @@ import { useState } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
 import { signOut } from '../../shared/contracts/accounts.ts';
 import { Button } from '../components/ui/button.tsx';
-import { Dialog } from '../components/ui/dialog.tsx';
-import { Menu, MenuChoices, MenuItem, MenuSeparator } from '../components/ui/menu.tsx';
+import { Disclosure } from '../components/ui/disclosure.tsx';
+import { Notice } from '../components/ui/notice.tsx';
+import { RadioGroup } from '../components/ui/radio-group.tsx';
 import { stripLinkClass } from '../components/ui/top-strip.tsx';
 import { useAct } from '../hooks/use-act.ts';
 import { meQuery } from '../lib/queries/me.ts';
 import { closeRealtime } from '../lib/socket.ts';
-import { chooseTheme, chosenTheme, THEMES } from '../lib/theme.ts';
+import { chooseTheme, chosenTheme, THEMES, type Theme } from '../lib/theme.ts';
+
+const PLACE = 'flex min-h-thumb items-center rounded px-2 no-underline hover:bg-bone';
 
 /** Account, shops, theme and the way out. */
 export function PersonMenu() {
   const { data: me } = useSuspenseQuery(meQuery());
   const navigate = useNavigate();
   const queryClient = useQueryClient();
-  const [theme, setTheme] = useState(chosenTheme());
+  const [theme, setTheme] = useState<Theme>(chosenTheme());
   const leave = useAct(signOut, {
     onDone: () => {
       closeRealtime();
@@ -25,54 +28,55 @@ export function PersonMenu() {
     },
   });
   return (
-    <>
-      <Menu
-        trigger={
-          <button type="button" className={stripLinkClass(false)}>
-            {me.displayName}
-          </button>
-        }
-      >
-        <MenuItem asChild>
-          <Link to="/account">Account</Link>
-        </MenuItem>
+    <Disclosure label={me.displayName} buttonClassName={stripLinkClass(false)}>
+      <ul className="border-b border-hairline pb-2">
+        <li>
+          <Link to="/account" className={PLACE}>
+            Account
+          </Link>
+        </li>
         {me.shops.map((shop) => (
-          <MenuItem key={shop.shopId} asChild>
-            <Link to={`/shops/${shop.shopId}`}>{shop.name}</Link>
-          </MenuItem>
+          <li key={shop.shopId}>
+            <Link to={`/shops/${shop.shopId}`} className={PLACE}>
+              {shop.name}
+            </Link>
+          </li>
         ))}
         {me.isSteward && (
-          <MenuItem asChild>
-            <Link to="/shops">All shops</Link>
-          </MenuItem>
+          <li>
+            <Link to="/shops" className={PLACE}>
+              All shops
+            </Link>
+          </li>
         )}
-        <MenuItem asChild>
-          <Link to="/api-reference">API reference</Link>
-        </MenuItem>
-        <MenuSeparator />
-        <MenuChoices
-          label="Light"
-          value={theme}
+        <li>
+          <Link to="/api-reference" className={PLACE}>
+            API reference
+          </Link>
+        </li>
+      </ul>
+      <div className="border-b border-hairline px-2 py-3">
+        <RadioGroup
+          legend="Look of the page"
+          name="theme"
           options={THEMES}
-          onChoose={(next) => {
+          value={theme}
+          onValueChange={(next) => {
             chooseTheme(next);
             setTheme(next);
           }}
         />
-        <MenuSeparator />
-        <MenuItem onSelect={() => leave.run({})}>Sign out</MenuItem>
-      </Menu>
-      <Dialog
-        open={leave.problem !== null}
-        onOpenChange={leave.forget}
-        title="You are still signed in"
-        description="Ferrule could not be told that you leave. Try again when the connection is back; until then this device stays signed in."
-        actions={
-          <Button busy={leave.pending} onClick={() => leave.run({})}>
-            Sign out
-          </Button>
-        }
-      />
-    </>
+      </div>
+      <div className="grid gap-2 px-2 pt-3">
+        <Button variant="outline" busy={leave.pending} onClick={() => leave.run({})}>
+          Sign out
+        </Button>
+        {leave.problem && (
+          <Notice kind="alert" title="You are still signed in">
+            Ferrule could not be told that you leave. Try again when the connection is back.
+          </Notice>
+        )}
+      </div>
+    </Disclosure>
   );
 }

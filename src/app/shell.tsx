@@ -1,12 +1,13 @@
-import { useSuspenseQuery } from '@tanstack/react-query';
-import { lazy, Suspense, useEffect, useState, useSyncExternalStore } from 'react';
-import { Form, Link, NavLink, Outlet, ScrollRestoration, useSearchParams } from 'react-router-dom';
+import { useQuery, useSuspenseQuery } from '@tanstack/react-query';
+import { lazy, Suspense, useEffect, useRef, useState, useSyncExternalStore } from 'react';
+import { Link, NavLink, Outlet, useLocation, useNavigate, useSearchParams } from 'react-router-dom';
 import { BrandMark } from '../components/ui/brand-mark.tsx';
 import { Notice } from '../components/ui/notice.tsx';
 import { Skeleton } from '../components/ui/skeleton.tsx';
 import { SkipLink, stripLinkClass, TopStrip } from '../components/ui/top-strip.tsx';
 import { useArrival } from '../hooks/use-arrival.ts';
-import { benchQuery } from '../lib/queries/commissions.ts';
+import { isProblem } from '../lib/api.ts';
+import { benchQuery } from '../lib/queries/bench.ts';
 import { meQuery } from '../lib/queries/me.ts';
 import { connectionState, openRealtime } from '../lib/socket.ts';
 
@@ -32,11 +33,21 @@ function ConnectionLine() {
 
 function Search() {
   const [params] = useSearchParams();
+  const navigate = useNavigate();
   const asked = params.get('search') ?? '';
+  const field = useRef<HTMLInputElement>(null);
+  useEffect(() => {
+    if (field.current) field.current.value = asked;
+  }, [asked]);
+  const find = (form: FormData): void => {
+    const search = form.get('search');
+    const query = typeof search === 'string' && search.trim() !== '' ? new URLSearchParams({ search }) : '';
+    void navigate({ pathname: '/commissions', search: query.toString() });
+  };
   return (
-    <Form action="/commissions" role="search">
+    <form action={find} role="search">
       <input
-        key={asked}
+        ref={field}
         type="search"
         name="search"
         defaultValue={asked}
@@ -44,27 +55,31 @@ function Search() {
         placeholder="Find a piece, a client or a code"
         className="min-h-thumb w-full rounded border border-edge bg-bone px-3 text-body"
       />
-    </Form>
+    </form>
   );
 }
 
 function Unread() {
-  const { data } = useSuspenseQuery(benchQuery());
-  return data.unreadThreads > 0 ? (
-    <Link to="/" className={stripLinkClass(false)}>
-      Unread <strong>{data.unreadThreads}</strong>
+  // Not suspended: a bench that cannot be read must not take every other page along.
+  const { data } = useQuery(benchQuery());
+  return data && data.unreadThreads > 0 ? (
+    <Link to="/#unread" className={stripLinkClass(false)}>
+      Unread&nbsp;<strong>{data.unreadThreads}</strong>
     </Link>
   ) : null;
 }
 
+/** Rooms of one commission are one place: going from one to the next keeps what is around them. */
+const placeOf = (pathname: string): string => pathname.split('/').slice(0, 3).join('/');
+
 function Frame() {
+  const { pathname } = useLocation();
   const { data: me } = useSuspenseQuery(meQuery());
   const isClientOnly = me.shops.length === 0 && !me.isSteward;
   useArrival();
   useEffect(() => void openRealtime(), []);
   return (
     <>
-      <ScrollRestoration />
       <SkipLink target="page" />
       <TopStrip
         homeLink={(mark) => (
@@ -83,11 +98,7 @@ function Frame() {
           </>
         }
         search={<Search />}
-        notices={
-          <Suspense fallback={null}>
-            <Unread />
-          </Suspense>
-        }
+        notices={<Unread />}
         person={
           <Suspense fallback={<span className={stripLinkClass(false)}>{me.displayName}</span>}>
             <PersonMenu />
@@ -96,6 +107,7 @@ function Frame() {
       />
       <ConnectionLine />
       <Suspense
+        key={placeOf(pathname)}
         fallback={
           <div className="p-6">
             <Skeleton label="Fetching the page" lines={5} />
@@ -108,8 +120,10 @@ function Frame() {
   );
 }
 
-/** The frame of every page behind the sign-in. */
+/** The frame of every page behind the sign-in. Who is not signed in is on the way to the sign-in page already. */
 export function SignedInShell() {
+  const { error } = useQuery(meQuery());
+  if (isProblem(error, 'not-signed-in')) return null;
   return (
     <Suspense
       fallback={

@@ -1,5 +1,6 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import type { ThreadSubject } from '../../shared/contracts/vocabulary.ts';
+import { Fold } from '../components/ui/fold.tsx';
 import { Sheet } from '../components/ui/sheet.tsx';
 import { OpenThread } from '../features/threads/components/open-thread.tsx';
 import { ThreadSheet } from '../features/threads/components/thread-sheet.tsx';
@@ -37,10 +38,9 @@ export function SubjectThreads({ commissionId, subject, subjectId, title, partyI
       {here.length === 0 ? (
         <Sheet title="Talk about this">{opener}</Sheet>
       ) : (
-        <details>
-          <summary className="min-h-thumb cursor-pointer py-2 text-note">Open another thread about this</summary>
+        <Fold summary="Open another thread about this">
           <Sheet title="Another thread">{opener}</Sheet>
-        </details>
+        </Fold>
       )}
     </>
   );

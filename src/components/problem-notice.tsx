@@ -2,22 +2,11 @@ import type { ApiProblem } from '../lib/api.ts';
 import { Notice } from './ui/notice.tsx';
 
 /** A refusal in words: what happened, what was kept, and each value that needs attention. */
-export function ProblemNotice({ problem, onLook }: { problem: ApiProblem | null; onLook?: () => void }) {
+export function ProblemNotice({ problem }: { problem: ApiProblem | null }) {
   if (!problem) return null;
   const { title, detail, errors } = problem.problem;
   return (
-    <Notice
-      kind="alert"
-      tone="oxide"
-      title={title}
-      actions={
-        onLook && problem.code === 'stale-revision' ? (
-          <button type="button" className="underline" onClick={onLook}>
-            Look at it as it is now
-          </button>
-        ) : undefined
-      }
-    >
+    <Notice kind="alert" tone="oxide" title={title}>
       {detail && <p>{detail}</p>}
       {errors && (
         <ul className="list-disc pl-5">

@@ -1,9 +1,12 @@
 import { useMutation, useQueryClient, type QueryKey } from '@tanstack/react-query';
 import { useRef } from 'react';
 import type { AnyRoute, RouteInput, RouteOutput } from '../../shared/contracts/route.ts';
+import { announce } from '../components/ui/announcer.ts';
 import { api, ApiProblem, ownProblem } from '../lib/api.ts';
 
 export interface ActOptions<T extends AnyRoute> {
+  /** Told to those who listen, when it is done. */
+  said?: string;
   /** Queries that the act makes stale, besides what its realtime event tells. */
   stale?: (output: RouteOutput<T>) => readonly QueryKey[];
   onDone?: (output: RouteOutput<T>) => void;
@@ -21,6 +24,12 @@ const problemFrom = (error: Error | null): ApiProblem | null =>
   error === null || error instanceof ApiProblem
     ? error
     : ownProblem('unexpected', 'What you wrote is kept. Load the page again and try once more.');
+
+/** The button that was pressed may be gone with what it stood for; the focus then goes to the page's heading, not nowhere. */
+const keepFocus = (): void =>
+  void requestAnimationFrame(() => {
+    if (document.activeElement === document.body) document.querySelector<HTMLElement>('h1')?.focus();
+  });
 
 /**
  * One act of the API behind a button. A try that failed is sent again under the same idempotency key, so that pressing
@@ -40,6 +49,8 @@ export function useAct<T extends AnyRoute>(route: T, options: ActOptions<T> = {}
       key.current = null;
       await Promise.all((options.stale?.(output) ?? []).map((queryKey) => queryClient.invalidateQueries({ queryKey })));
       options.onDone?.(output);
+      if (options.said) announce(options.said);
+      keepFocus();
     },
   });
   return {

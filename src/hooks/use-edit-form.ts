@@ -57,9 +57,11 @@ export function useEditForm<T extends AnyRoute, R extends Revised, V extends For
   route: T,
   options: EditFormOptions<T, R, V>,
 ): EditForm<T, V> {
+  const revision = { revision: options.record.revision.toString() };
   const form = useContractForm<T, V & { revision: string }>(route, {
     name: options.name,
-    initial: { ...options.toValues(options.record), revision: options.record.revision.toString() },
+    initial: { ...options.toValues(options.record), ...revision },
+    begunFrom: revision as Partial<V & { revision: string }>,
     toInput: (values) => options.toInput(values, Number(values.revision)),
     stale: options.stale,
   });

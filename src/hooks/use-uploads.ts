@@ -44,9 +44,10 @@ export function useUploads(target: UploadTarget) {
     running.current.delete(id);
     setFiles((all) => all.filter((one) => one.id !== id));
   };
-  const clear = (): void => {
-    running.current.clear();
-    setFiles([]);
+  /** Lets go of files that are where they were meant to go. */
+  const forget = (ids: readonly string[]): void => {
+    for (const id of ids) running.current.delete(id);
+    setFiles((all) => all.filter((one) => !ids.includes(one.id)));
   };
-  return { files, add, again, drop, clear };
+  return { files, add, again, drop, forget };
 }

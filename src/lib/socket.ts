@@ -34,10 +34,14 @@ const spread = ({ least, most }: typeof AFTER_CUT_MS): number => least + Math.ra
 /** Opens the one connection of this page; the library is loaded only then. Calling again does nothing. */
 export async function openRealtime(): Promise<void> {
   if (socket) return;
-  const { io } = await import('socket.io-client');
+  const library = await import('socket.io-client').catch(() => null);
   if (socket) return;
+  if (!library) {
+    setTimeout(() => void openRealtime(), spread(AFTER_REFUSAL_MS));
+    return;
+  }
   // The server's own jitter: a restart must not bring every browser back in the same instant.
-  const made = io({
+  const made = library.io({
     transports: ['websocket'],
     reconnectionDelay: 500,
     reconnectionDelayMax: 8000,

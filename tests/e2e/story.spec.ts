@@ -173,6 +173,7 @@ test('a tight fit, a rework note with photographs, an agreed day, and one answer
   const clientLoads = await countLoads(client);
 
   await test.step('the hilt maker measures, with the Enter of a caliper, in any unit', async () => {
+    await maker.getByLabel('Which part').selectOption({ label: 'cavity' });
     await maker.getByLabel('Reading 1', { exact: true }).fill('28.04');
     await maker.getByLabel('Reading 1', { exact: true }).press('Enter');
     await expect(maker.getByLabel('Reading 2', { exact: true })).toBeFocused();

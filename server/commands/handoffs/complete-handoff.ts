@@ -27,7 +27,7 @@ export const completeHandoff = (ctx: RequestContext, { params, body }: ParsedInp
     await guardHandoff(ctx, uow.manager, handoff, body.revision);
     if (handoff.doneOn) throw new NotInThisState('These parts were received already.');
     if (body.onDay > ctx.todayIso)
-      throw new InputInvalid([{ pointer: '/body/onDay', message: 'Parts can not have arrived on a day to come' }]);
+      throw new InputInvalid([{ pointer: '/body/onDay', message: 'Parts cannot have arrived on a day to come' }]);
     const parts = await uow.manager.find(Part, {
       where: { id: In(handoff.partIds), commissionId },
       lock: { mode: 'pessimistic_write' },

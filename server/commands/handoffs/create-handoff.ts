@@ -1,6 +1,7 @@
 import { In } from 'typeorm';
 import type { createHandoff as contract } from '../../../shared/contracts/handoffs.ts';
 import type { ParsedInput } from '../../../shared/contracts/route.ts';
+import type { ProblemError } from '../../../shared/problems/problems.ts';
 import { inTransaction } from '../../db/unit-of-work.ts';
 import { Handoff } from '../../entities/handoff.ts';
 import { Leg } from '../../entities/leg.ts';
@@ -10,6 +11,18 @@ import { authorizeCreate } from '../../policies/authorize.ts';
 import { partyNames, requireParties } from '../../queries/parties/load-party.ts';
 import { requireParts } from '../../queries/parts/load-part.ts';
 import { announceHandoff } from './announce-handoff.ts';
+
+/** A handoff comes after a leg of the party that gives, and before one of the party that receives. */
+function legError(
+  field: 'fromLegId' | 'toLegId',
+  legId: string | null,
+  owners: ReadonlyMap<string, string>,
+  partyId: string,
+): ProblemError[] {
+  if (legId === null || owners.get(legId) === partyId) return [];
+  const message = owners.has(legId) ? 'This leg is work of another party' : 'This leg is not in this commission';
+  return [{ pointer: `/body/${field}`, message }];
+}
 
 export const createHandoff = (ctx: RequestContext, { params, body }: ParsedInput<typeof contract>): Promise<string> =>
   inTransaction(ctx, async (uow) => {
@@ -25,10 +38,13 @@ export const createHandoff = (ctx: RequestContext, { params, body }: ParsedInput
       body.partIds.map((id, index) => [`/body/partIds/${index}`, id]),
     );
     const legIds = [body.fromLegId, body.toLegId].filter((id) => id !== null);
-    const found = new Set((await uow.manager.findBy(Leg, { commissionId, id: In(legIds) })).map((leg) => leg.id));
-    const errors = (['fromLegId', 'toLegId'] as const)
-      .filter((field) => body[field] !== null && !found.has(body[field]))
-      .map((field) => ({ pointer: `/body/${field}`, message: 'This leg is not in this commission' }));
+    const owners = new Map(
+      (await uow.manager.findBy(Leg, { commissionId, id: In(legIds) })).map((leg) => [leg.id, leg.partyId]),
+    );
+    const errors = [
+      ...legError('fromLegId', body.fromLegId, owners, body.fromPartyId),
+      ...legError('toLegId', body.toLegId, owners, body.toPartyId),
+    ];
     if (errors.length > 0) throw new InputInvalid(errors);
     const row = await uow.manager.save(
       uow.manager.create(Handoff, { ...body, partIds: [...new Set(body.partIds)], commissionId }),

@@ -74,6 +74,6 @@ async function shopFor(uow: UnitOfWork, account: Account, { shopId, newShop }: S
       { pointer: '/body/shopId', message: 'Choose one of your shops, or give a new one a name' },
     ]);
   if (member.role === 'bookkeeper')
-    throw new NotPermitted('A bookkeeper can not take work on for a shop; ask its owner.');
+    throw new NotPermitted('A bookkeeper cannot take work on for a shop; ask its owner.');
   return uow.manager.findOneByOrFail(Shop, { id: member.shopId });
 }

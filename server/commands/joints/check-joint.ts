@@ -54,6 +54,6 @@ export async function checkJoint(manager: EntityManager, commissionId: string, j
   if (joint.holePartId === joint.shaftPartId)
     errors.push({ pointer: '/body/shaftPartId', message: 'A joint is between two parts' });
   if (joint.clearanceMinUm > joint.clearanceMaxUm)
-    errors.push({ pointer: '/body/clearanceMinUm', message: 'The least clearance can not be above the greatest' });
+    errors.push({ pointer: '/body/clearanceMinUm', message: 'The least clearance cannot be above the greatest' });
   if (errors.length > 0) throw new InputInvalid(errors);
 }

@@ -37,7 +37,7 @@ export const moveLeg = (ctx: RequestContext, { params, body }: ParsedInput<typeo
     );
     if (!move.ok) throw new NotInThisState(move.words);
     if (body.state === 'finished' && leg.startedOn && body.onDay < leg.startedOn)
-      throw new InputInvalid([{ pointer: '/body/onDay', message: 'A leg can not be finished before it was started' }]);
+      throw new InputInvalid([{ pointer: '/body/onDay', message: 'A leg cannot be finished before it was started' }]);
     await uow.manager.update(
       Leg,
       { id: legId },

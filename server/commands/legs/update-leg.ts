@@ -30,12 +30,12 @@ export const updateLeg = (ctx: RequestContext, { params, body }: ParsedInput<typ
       (field) => !settable.has(field),
     );
     if (refused.length > 0)
-      throw new NotPermitted(`Your role can not change ${refused.join(', ')} of this leg. Nothing was saved.`);
+      throw new NotPermitted(`Your role cannot change ${refused.join(', ')} of this leg. Nothing was saved.`);
     guardRevision(leg, revision, () => presentLeg(ctx.ability, leg));
     const days = { ...leg, ...changes };
     if (days.hopefulDays > days.likelyDays || days.likelyDays > days.badDays)
       throw new InputInvalid([
-        { pointer: '/body/likelyDays', message: 'Hopeful can not be longer than likely, nor likely longer than bad' },
+        { pointer: '/body/likelyDays', message: 'Hopeful cannot be longer than likely, nor likely longer than bad' },
       ]);
     if (changes.partyId) await requireParties(uow.manager, commissionId, [['/body/partyId', changes.partyId]]);
     if (changes.partId) await requireParts(uow.manager, commissionId, [['/body/partId', changes.partId]]);

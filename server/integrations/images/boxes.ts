@@ -19,7 +19,7 @@ const WINDOW_BYTES = 4096;
 export const videoUnreadable = (): FileRefusedError =>
   new FileRefusedError(
     'video-unreadable',
-    'This video is damaged or built in a way that Ferrule can not check for places, so nothing of it was kept. Export it again as MP4 and send that.',
+    'This video is damaged or built in a way that Ferrule cannot check for places, so nothing of it was kept. Export it again as MP4 and send that.',
   );
 
 /** Reads and overwrites boxes of one open file; only headers and tables are ever held in memory. */

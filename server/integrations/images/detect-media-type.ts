@@ -35,7 +35,7 @@ function refusalOf(mediaType: string): FileRefusedError {
     mediaType === 'image/heic-sequence' ||
     mediaType === 'image/heif-sequence'
   )
-    return refused('This is a HEIC photograph, which Ferrule can not read.', 'Save it as JPEG and send that.');
+    return refused('This is a HEIC photograph, which Ferrule cannot read.', 'Save it as JPEG and send that.');
   return refused('This is not a kind of file that Ferrule takes.', `${TAKEN} Put anything else into a ZIP.`);
 }
 

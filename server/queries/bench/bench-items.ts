@@ -56,7 +56,7 @@ export function waitsOf(facts: BenchFacts, todayIso: string): Wait[] {
     if (!step) continue;
     if (report.state === 'agreed' && report.shows && report.consentState === 'asked') {
       const client = facts.parties.find(
-        (party) => party.commissionId === report.commissionId && party.roles.includes('client'),
+        (party) => party.commissionId === report.commissionId && !party.left && party.roles.includes('client'),
       );
       if (client)
         add(report.commissionId, client.id, both, {
@@ -65,6 +65,14 @@ export function waitsOf(facts: BenchFacts, todayIso: string): Wait[] {
           refId: report.noteId ?? report.id,
           words: 'Your consent to a correction that will show',
         });
+      continue;
+    }
+    if (report.state === 'agreed' && report.consentState === 'refused') {
+      add(report.commissionId, report.answerPartyId, both, {
+        ...common,
+        kind: 'answer-report',
+        words: `Answer anew, the client refused: ${report.title}`,
+      });
       continue;
     }
     add(report.commissionId, step.side === 'raiser' ? report.raisedByPartyId : report.answerPartyId, both, {

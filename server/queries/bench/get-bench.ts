@@ -51,7 +51,9 @@ export async function getBench(ctx: RequestContext): Promise<RouteOutput<typeof 
         ]
       : [];
   });
-  const unread = await countUnreadThreads(ctx, commissionIds, [...mine]);
+  const unread = await unreadThreads(ctx, commissionIds, [...mine]);
+  const titles = new Map(facts.commissions.map((piece) => [piece.id, piece.title]));
+  const asClient = new Set(working.filter((one) => one.roles.includes('client')).map((one) => one.commissionId));
   return {
     waitsOnYou: [...onMe, ...mentions].sort(byUrgency),
     youWaitOn: onOthers.sort(byUrgency),
@@ -61,20 +63,56 @@ export async function getBench(ctx: RequestContext): Promise<RouteOutput<typeof 
       limit: 40,
     }),
     lastHereAt: seenAt?.toISOString() ?? null,
-    unreadThreads: unread,
+    unreadThreads: unread.count,
+    unread: unread.rows.map((row) => ({
+      threadId: row.thread_id,
+      commissionId: row.commission_id,
+      commissionTitle: titles.get(row.commission_id) ?? '',
+      title: row.title,
+      messages: row.messages,
+    })),
+    yourPieces: facts.commissions
+      .filter((piece) => asClient.has(piece.id))
+      .map((piece) => ({
+        commissionId: piece.id,
+        title: piece.title,
+        code: showCode(piece.code),
+        leadName: piece.leadName,
+        state: piece.state,
+      })),
     roles: [...new Set(working.flatMap((one) => one.roles))],
   };
 }
 
-/** Threads with something unread, among those the person's parties may read; the same rules as the ability, over all commissions at once. */
-async function countUnreadThreads(ctx: RequestContext, commissionIds: string[], partyIds: string[]): Promise<number> {
-  const [row] = await ctx.manager.query<{ count: number }[]>(
-    `SELECT count(*)::int AS count FROM "thread" t LEFT JOIN "thread_mark" k ON k."thread_id" = t."id" AND k."account_id" = $3
+interface UnreadRow {
+  thread_id: string;
+  commission_id: string;
+  title: string;
+  messages: number;
+  threads: number;
+}
+
+const UNREAD_SHOWN = 20;
+
+/**
+ * Threads with something unread, newest first, among those the person's parties may read; the same rules as the ability,
+ * over all commissions at once.
+ */
+async function unreadThreads(
+  ctx: RequestContext,
+  commissionIds: string[],
+  partyIds: string[],
+): Promise<{ count: number; rows: UnreadRow[] }> {
+  const rows = await ctx.manager.query<UnreadRow[]>(
+    `SELECT t."id" AS thread_id, t."commission_id", t."title", t."last_sequence" - COALESCE(k."read_sequence", 0) AS messages,
+       count(*) OVER ()::int AS threads
+     FROM "thread" t LEFT JOIN "thread_mark" k ON k."thread_id" = t."id" AND k."account_id" = $3
      WHERE t."commission_id" = ANY($1) AND t."last_sequence" > COALESCE(k."read_sequence", 0)
        AND EXISTS (SELECT 1 FROM "party" p WHERE p."id" = ANY($2) AND p."commission_id" = t."commission_id" AND (
          t."audience" = 'everyone' OR p."id" = ANY(t."party_ids") OR (t."audience" = 'makers' AND p."shop_id" IS NOT NULL)
-         OR (t."audience" = 'named' AND 'lead' = ANY(p."roles"))))`,
-    [commissionIds, partyIds, ctx.actor.accountId],
+         OR (t."audience" = 'named' AND 'lead' = ANY(p."roles"))))
+     ORDER BY t."last_message_at" DESC NULLS LAST, t."id" LIMIT $4`,
+    [commissionIds, partyIds, ctx.actor.accountId, UNREAD_SHOWN],
   );
-  return row?.count ?? 0;
+  return { count: rows[0]?.threads ?? 0, rows };
 }

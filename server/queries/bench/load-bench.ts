@@ -12,8 +12,15 @@ const OPEN = OPEN_REPORT_STATES.map((state) => `'${state}'`).join(', ');
 
 /** What the bench looks at, each in one statement over all of a person's open commissions. */
 export interface BenchFacts {
-  commissions: { id: string; title: string; code: string; coverFileId: string | null; state: CommissionState }[];
-  parties: { id: string; commissionId: string; name: string; roles: PartyRole[] }[];
+  commissions: {
+    id: string;
+    title: string;
+    code: string;
+    coverFileId: string | null;
+    state: CommissionState;
+    leadName: string;
+  }[];
+  parties: { id: string; commissionId: string; name: string; roles: PartyRole[]; left: boolean }[];
   legs: {
     id: string;
     commissionId: string;
@@ -64,10 +71,10 @@ export async function loadBenchFacts(
   const ask = <T>(sql: string, params: unknown[] = [commissionIds]): Promise<T[]> => manager.query<T[]>(sql, params);
   const [commissions, parties, legs, reports, handoffs, mentions] = await Promise.all([
     ask<BenchFacts['commissions'][number]>(
-      `SELECT "id", "title", "code", "cover_file_id" AS "coverFileId", "state" FROM "commission" WHERE "id" = ANY($1) AND "state" <> 'ended'`,
+      `SELECT "id", "title", "code", "cover_file_id" AS "coverFileId", "state", "lead_name" AS "leadName" FROM "commission" WHERE "id" = ANY($1) AND "state" <> 'ended'`,
     ),
     ask<BenchFacts['parties'][number]>(
-      `SELECT p."id", p."commission_id" AS "commissionId", p."roles", COALESCE(s."name", a."display_name") AS name FROM "party" p
+      `SELECT p."id", p."commission_id" AS "commissionId", p."roles", p."left_at" IS NOT NULL AS left, COALESCE(s."name", a."display_name") AS name FROM "party" p
          LEFT JOIN "shop" s ON s."id" = p."shop_id" LEFT JOIN "account" a ON a."id" = p."account_id" WHERE p."commission_id" = ANY($1)`,
     ),
     ask<BenchFacts['legs'][number]>(

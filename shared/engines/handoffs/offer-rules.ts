@@ -29,7 +29,7 @@ export function checkOfferAct(
   onDay?: string,
 ): OfferAnswer {
   const { standing } = handoff;
-  if (handoff.doneOn) return { ok: false, words: 'This handoff is done; its day can not be changed any more.' };
+  if (handoff.doneOn) return { ok: false, words: 'This handoff is done; its day cannot be changed any more.' };
   const own = standing !== null && byPartyIds.includes(standing.byPartyId);
   if (act === 'offer') {
     if (onDay !== undefined && onDay === handoff.agreedOn && !standing)

@@ -25,7 +25,7 @@ export function checkLegMove(leg: LegMoveFacts, move: { to: LegState; early: boo
   if (!NEXT[leg.state].includes(move.to))
     return {
       ok: false,
-      words: `A leg that is ${leg.state.replace('-', ' ')} can not become ${move.to.replace('-', ' ')}.`,
+      words: `A leg that is ${leg.state.replace('-', ' ')} cannot become ${move.to.replace('-', ' ')}.`,
     };
   if (move.to === 'finished' && leg.held)
     return {

@@ -1,5 +1,5 @@
 import { Suspense } from 'react';
-import { NavLink, Outlet } from 'react-router-dom';
+import { NavLink, Outlet, useLocation } from 'react-router-dom';
 import { Page } from '../../components/ui/page.tsx';
 import { Sheet } from '../../components/ui/sheet.tsx';
 import { Skeleton } from '../../components/ui/skeleton.tsx';
@@ -15,6 +15,7 @@ const roomLink = ({ isActive }: { isActive: boolean }): string =>
 /** Headline, band, and the way to each room; the room itself is the child route. */
 export function Component() {
   const commissionId = usePathId('commissionId');
+  const { pathname } = useLocation();
   const { ability, isClient, roles } = useSight(commissionId);
   const works =
     mayDo(ability, 'read', 'Joint', { commissionId, holePartyId: '', shaftPartyId: '' }) ||
@@ -31,7 +32,11 @@ export function Component() {
           </Sheet>
         </div>
       )}
-      <nav aria-label="Rooms of this commission" className="mb-5 flex flex-wrap gap-x-5 border-b border-hairline">
+      <nav
+        data-rooms=""
+        aria-label="Rooms of this commission"
+        className="mb-5 flex flex-wrap gap-x-5 border-b border-hairline"
+      >
         <NavLink end to={base} className={roomLink}>
           {isClient ? 'Your window' : isLead ? "Lead's desk" : 'Bench'}
         </NavLink>
@@ -64,7 +69,7 @@ export function Component() {
           </NavLink>
         )}
       </nav>
-      <Suspense fallback={<Skeleton label="Fetching the room" lines={4} />}>
+      <Suspense key={pathname} fallback={<Skeleton label="Fetching the room" lines={4} />}>
         <Outlet />
       </Suspense>
     </Page>

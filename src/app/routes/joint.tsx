@@ -2,6 +2,7 @@ import { useSuspenseQuery } from '@tanstack/react-query';
 import { Link, useNavigate } from 'react-router-dom';
 import { mayDo } from '../../../shared/abilities/ability.ts';
 import { TwoColumns } from '../../components/ui/page.tsx';
+import { Fold } from '../../components/ui/fold.tsx';
 import { Sheet } from '../../components/ui/sheet.tsx';
 import { RaiseForm } from '../../features/fit-reports/components/raise-form.tsx';
 import { FitSheet } from '../../features/joints/components/fit-sheet.tsx';
@@ -77,10 +78,9 @@ export function Component() {
           )}
           {mayDo(ability, 'update', 'Joint', facts) && (
             <Sheet title="Change the joint" note="What it is, and the fit that was agreed">
-              <details>
-                <summary className="min-h-thumb cursor-pointer py-2">Open the form</summary>
+              <Fold summary="Open the form">
                 <EditJoint choices={{ commissionId, parties, parts }} joint={joint} />
-              </details>
+              </Fold>
             </Sheet>
           )}
           <SubjectThreads

@@ -1,6 +1,7 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { mayDo } from '../../../shared/abilities/ability.ts';
 import { TwoColumns } from '../../components/ui/page.tsx';
+import { Fold } from '../../components/ui/fold.tsx';
 import { Sheet } from '../../components/ui/sheet.tsx';
 import { LegActs, OpenHandoffs, WhoHasWhat } from '../../features/commissions/components/rooms.tsx';
 import { LegsSheet } from '../../features/plan/components/legs-sheet.tsx';
@@ -40,35 +41,36 @@ export function Component() {
             {...(isLead
               ? {
                   actsOf: (part) => (
-                    <details>
-                      <summary className="min-h-thumb cursor-pointer py-2 text-note">Correct {part.name}</summary>
+                    <Fold summary={<>Correct {part.name}</>}>
                       <div className="pb-4">
                         <EditPart commissionId={commissionId} parties={parties} part={part} />
                       </div>
-                    </details>
+                    </Fold>
                   ),
                 }
               : {})}
           />
           <OpenHandoffs commissionId={commissionId} />
-          {isLead && (
-            <Sheet title="Add a part">
-              <AddPart {...choices} />
-            </Sheet>
-          )}
-          {isLead && (
-            <Sheet title="Add a leg">
-              <AddLeg key={`${parts.length} ${parties.length}`} {...choices} />
-            </Sheet>
-          )}
-          {isLead && (
-            <Sheet title="Add a joint">
-              <AddJoint key={`${parts.length} ${parties.length}`} {...choices} />
-            </Sheet>
-          )}
-          {mayHandOver && (
-            <Sheet title="Plan a handoff">
-              <AddHandoff {...choices} />
+          {(isLead || mayHandOver) && (
+            <Sheet title="Add to the plan">
+              {isLead && (
+                <>
+                  <Fold strong summary="A part" open={parts.length === 0}>
+                    <AddPart commissionId={commissionId} parties={parties} />
+                  </Fold>
+                  <Fold strong summary="A leg" open={parts.length > 0 && legs.length === 0}>
+                    <AddLeg {...choices} />
+                  </Fold>
+                  <Fold strong summary="A joint">
+                    <AddJoint {...choices} />
+                  </Fold>
+                </>
+              )}
+              {mayHandOver && (
+                <Fold strong summary="A handoff">
+                  <AddHandoff {...choices} mine={mine} />
+                </Fold>
+              )}
             </Sheet>
           )}
         </div>

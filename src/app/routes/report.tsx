@@ -59,7 +59,7 @@ export function Component() {
           />
           <FitSheet joint={joint} readings={readings} unit={me.preferredUnit} />
           {notes.map((note) => (
-            <NoteSheet key={note.id} note={note} nameOf={nameOf} sideNames={sideNames} />
+            <NoteSheet key={note.id} note={note} nameOf={nameOf} sideNames={sideNames} unit={me.preferredUnit} />
           ))}
           <ReportActs commissionId={commissionId} detail={detail} />
           {mayAnswer && (

@@ -32,11 +32,12 @@ export function JointSection({ title, holeName, shaftName, formatLength = format
       widthPx={widthPx}
       heightPx={layout.heightPx}
       containerRef={figure}
-      scaleNote={
+      scaleNote={[
         layout.exaggeration === 1
           ? `Scale ${ratioInWords(layout.ratio)} on paper.`
-          : `Scale ${ratioInWords(layout.ratio)} on paper; clearance${input.removal ? ' and removal' : ''} drawn ${layout.exaggeration} times larger.`
-      }
+          : `Scale ${ratioInWords(layout.ratio)} on paper; clearance${input.removal ? ' and removal' : ''} drawn ${layout.exaggeration} times larger.`,
+        ...(input.wallMm === null ? ['The outer wall is not measured; it is drawn as an example.'] : []),
+      ].join(' ')}
     >
       <defs>
         <Hatch id={`${id}-outer`} lineClass="stroke-gun-blue/70" lean="right" spacingPx={8} />

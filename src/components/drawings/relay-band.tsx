@@ -13,20 +13,18 @@ export interface RelayBandProps {
   input: BandInput;
   /** Tints of the two shops of a handoff, for its half rings. */
   tintsOf?: (handoffId: string) => RingTints | null;
-  /** Turned downwards whatever the width, as in the client's window. */
-  downwards?: boolean;
 }
 
 /**
  * The commission as a band: a tube per travelling part, from brief to delivery. Across where there are 720 px, downwards
  * below. Readers get the same steps in the same order.
  */
-export function RelayBand({ label, input, tintsOf, downwards = false }: RelayBandProps) {
+export function RelayBand({ label, input, tintsOf }: RelayBandProps) {
   const figure = useRef<HTMLElement>(null);
   const widthPx = useContainerWidth(figure, ACROSS_FROM_PX);
   const gutterPx = gutterFor(input.parts.map((part) => part.name));
   const model = bandModel(input, charactersAcross(widthPx, gutterPx));
-  const across = !downwards && widthPx >= ACROSS_FROM_PX;
+  const across = widthPx >= ACROSS_FROM_PX;
   return (
     <figure ref={figure} aria-label={label} className="min-w-0">
       {across ? (

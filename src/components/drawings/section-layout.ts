@@ -6,8 +6,8 @@ export interface SectionInput {
   shaftDiameterMm: number;
   /** Length on which the two touch, from the spigot's free end to its shoulder. */
   engagementMm: number;
-  /** Wall of the outer part. */
-  wallMm: number;
+  /** Wall of the outer part; null while nobody measured it. */
+  wallMm: number | null;
   removal: SectionRemoval | null;
 }
 
@@ -44,6 +44,8 @@ const TOP_PX = 46;
 const BOTTOM_PX = 64;
 const SIDE_PX = 84;
 const MAX_HALF_PX = 165;
+/** A wall that was not measured is drawn as an example, and the drawing says so. */
+const EXAMPLE_WALL_SHARE = 0.12;
 /** A gap below this many pixels can't be told from a line. */
 const WANTED_GAP_PX = 9;
 
@@ -53,7 +55,7 @@ export function layoutSection(widthPx: number, input: SectionInput): SectionLayo
   const behindMm = Math.max(3, engagementMm * 0.25);
   const shoulderMm = Math.max(6, engagementMm * 0.5);
   const lengthMm = behindMm + engagementMm + shoulderMm;
-  const outerRMm = holeDiameterMm / 2 + wallMm;
+  const outerRMm = holeDiameterMm / 2 + (wallMm ?? holeDiameterMm * EXAMPLE_WALL_SHARE);
   const ratio = standardRatio(
     Math.min((widthPx - 2 * SIDE_PX) / lengthMm, MAX_HALF_PX / outerRMm, PX_PER_MM * 10) / PX_PER_MM,
   );

@@ -1,4 +1,4 @@
-import { scaleLinear } from 'd3-scale';
+import { nice, ticks } from 'd3-array';
 import { firstFree } from './boxes.ts';
 import type { Box } from './boxes.ts';
 import { PX_PER_MM, standardRatio } from './drawing-scale.ts';
@@ -11,6 +11,8 @@ export const ZONE_TEXT_PX = 13;
 const LINE_PX = 17;
 const AXIS_PX = 54;
 const TOP_PX = 34;
+/** About so many lines of the scale. */
+const TICKS = 4;
 const MAX_PLOT_PX = 250;
 
 export interface PlacedText {
@@ -148,10 +150,11 @@ function verticalScale(sides: readonly FitSide[]) {
     ...readingsUm,
   ]);
   const furthestUm = Math.max(10, ...valuesUm.map(Math.abs));
-  const scale = scaleLinear()
-    .domain([Math.min(-furthestUm * 0.3, ...valuesUm) * 1.08, Math.max(furthestUm * 0.3, ...valuesUm) * 1.08])
-    .nice(4);
-  const [lowUm, highUm] = scale.domain() as [number, number];
+  const [lowUm, highUm] = nice(
+    Math.min(-furthestUm * 0.3, ...valuesUm) * 1.08,
+    Math.max(furthestUm * 0.3, ...valuesUm) * 1.08,
+    TICKS,
+  );
   const ratio = standardRatio((MAX_PLOT_PX / (highUm - lowUm) / PX_PER_MM) * 1000);
-  return { ticksUm: scale.ticks(4), lowUm, highUm, ratio, pxPerUm: (ratio * PX_PER_MM) / 1000 };
+  return { ticksUm: ticks(lowUm, highUm, TICKS), lowUm, highUm, ratio, pxPerUm: (ratio * PX_PER_MM) / 1000 };
 }

@@ -1,4 +1,4 @@
-import type { ReactNode, Ref } from 'react';
+import type { ReactNode } from 'react';
 import { joinClasses } from './join-classes.ts';
 
 export interface PageProps {
@@ -33,15 +33,14 @@ export interface PageHeadingProps {
   /** Acts on the whole page. */
   actions?: ReactNode;
   /** The shell moves the focus here after navigation. */
-  titleRef?: Ref<HTMLHeadingElement>;
 }
 
-export function PageHeading({ stampedLine, title, headline, actions, titleRef }: PageHeadingProps) {
+export function PageHeading({ stampedLine, title, headline, actions }: PageHeadingProps) {
   return (
     <header className="flex flex-wrap items-start justify-between gap-x-6 gap-y-3">
       <div className="flex min-w-0 flex-col gap-1.5">
         {stampedLine && <p className="text-lead-grey stamped">{stampedLine}</p>}
-        <h1 ref={titleRef} tabIndex={-1} className="text-title tracking-tight">
+        <h1 tabIndex={-1} className="text-title tracking-tight">
           {title}
         </h1>
         {headline && <p className="max-w-4xl text-lead text-pretty">{headline}</p>}

@@ -1,5 +1,5 @@
 import { useId } from 'react';
-import type { ChangeEventHandler, FocusEventHandler, ReactNode, Ref } from 'react';
+import type { ReactNode } from 'react';
 
 export interface RadioOption<Value extends string> {
   value: Value;
@@ -20,15 +20,11 @@ export interface RadioGroupProps<Value extends string> {
   required?: boolean;
   /** Set beside each other where there is room, as for two or three short words. */
   inRow?: boolean;
-  /** For form libraries that register native inputs; given to every radio of the group. */
-  inputRef?: Ref<HTMLInputElement>;
-  onChange?: ChangeEventHandler<HTMLInputElement>;
-  onBlur?: FocusEventHandler<HTMLInputElement>;
 }
 
 /** One choice of a few, as native radios in a fieldset: arrow keys, required and form reset are the browser's own. */
 export function RadioGroup<Value extends string>(props: RadioGroupProps<Value>) {
-  const { legend, name, options, value, defaultValue, onValueChange, hint, error, required, inRow, inputRef } = props;
+  const { legend, name, options, value, defaultValue, onValueChange, hint, error, required, inRow } = props;
   const id = useId();
   const describedBy = [hint ? `${id}-hint` : null, error ? `${id}-error` : null].filter(Boolean).join(' ') || undefined;
   return (
@@ -44,7 +40,6 @@ export function RadioGroup<Value extends string>(props: RadioGroupProps<Value>) 
           <div key={option.value}>
             <label className="flex min-h-thumb items-start gap-3 py-2.5">
               <input
-                ref={inputRef}
                 type="radio"
                 name={name}
                 value={option.value}
@@ -52,11 +47,7 @@ export function RadioGroup<Value extends string>(props: RadioGroupProps<Value>) 
                 required={required}
                 aria-describedby={option.hint ? `${id}-${option.value}` : undefined}
                 className="tick mt-px"
-                onBlur={props.onBlur}
-                onChange={(event) => {
-                  props.onChange?.(event);
-                  onValueChange?.(option.value);
-                }}
+                onChange={() => onValueChange?.(option.value)}
                 {...(value === undefined
                   ? { defaultChecked: defaultValue === option.value }
                   : { checked: value === option.value })}

@@ -1,4 +1,4 @@
-import { useId, useState } from 'react';
+import { useId, useRef, useState } from 'react';
 import type { KeyboardEvent, MouseEvent, ReactNode } from 'react';
 import { BrandMark, Wordmark } from './brand-mark.tsx';
 import { joinClasses } from './join-classes.ts';
@@ -25,8 +25,11 @@ export interface TopStripProps {
 export function TopStrip({ homeLink, nav, search, notices, person }: TopStripProps) {
   const [open, setOpen] = useState(false);
   const panelId = useId();
+  const opener = useRef<HTMLButtonElement>(null);
   const handleKeyDown = (event: KeyboardEvent<HTMLElement>) => {
-    if (event.key === 'Escape') setOpen(false);
+    if (event.key !== 'Escape' || !open) return;
+    setOpen(false);
+    opener.current?.focus();
   };
   const closeAfterLink = (event: MouseEvent<HTMLElement>) => {
     if ((event.target as Element).closest('a')) setOpen(false);
@@ -37,6 +40,7 @@ export function TopStrip({ homeLink, nav, search, notices, person }: TopStripPro
       <div
         className="mx-auto flex max-w-page flex-wrap items-center gap-x-6 px-4 lg:flex-nowrap md:px-7"
         onClick={closeAfterLink}
+        onSubmit={() => setOpen(false)}
       >
         <div className="flex min-h-14 flex-none items-center">
           {homeLink(
@@ -48,6 +52,7 @@ export function TopStrip({ homeLink, nav, search, notices, person }: TopStripPro
         </div>
         {hasPanel && (
           <button
+            ref={opener}
             type="button"
             aria-expanded={open}
             aria-controls={panelId}

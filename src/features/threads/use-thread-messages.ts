@@ -1,5 +1,5 @@
 import { useInfiniteQuery, useQueryClient, type InfiniteData } from '@tanstack/react-query';
-import { useEffect, useMemo } from 'react';
+import { useEffect, useMemo, useRef } from 'react';
 import { listMessages, type MessageView } from '../../../shared/contracts/threads.ts';
 import type { RouteOutput } from '../../../shared/contracts/route.ts';
 import { createThreadFollower } from '../../../shared/realtime/thread-follower.ts';
@@ -37,6 +37,13 @@ export function useThreadMessages(commissionId: string, threadId: string) {
     staleTime: Infinity,
   });
   const ready = query.isSuccess;
+  const failed = query.isError;
+  const { refetch } = query;
+  const follow = useRef<() => void>(() => undefined);
+
+  useEffect(() => {
+    if (failed) return onConnected(() => void refetch());
+  }, [failed, refetch]);
 
   useEffect(() => {
     if (!ready) return;
@@ -57,8 +64,10 @@ export function useThreadMessages(commissionId: string, threadId: string) {
       if (event.threadId === threadId) follower.poke();
     });
     const stopConnections = onConnected(() => follower.poke());
+    follow.current = () => follower.poke();
     follower.poke();
     return () => {
+      follow.current = () => undefined;
       stopEvents();
       stopConnections();
       follower.stop();
@@ -73,7 +82,10 @@ export function useThreadMessages(commissionId: string, threadId: string) {
     messages,
     lastSequence: query.data?.pages[0]?.lastSequence ?? 0,
     pending: query.isPending,
-    failed: query.isError,
+    failed,
+    again: () => void refetch(),
+    /** Asks for what is new without waiting to be told. */
+    look: () => follow.current(),
     hasOlder: query.hasNextPage,
     loadingOlder: query.isFetchingNextPage,
     showOlder: () => void query.fetchNextPage(),

@@ -57,6 +57,3 @@ export const commissionQueries = {
       getNextPageParam: (last) => last.nextCursor,
     }),
 };
-
-export const benchQuery = () =>
-  queryOptions({ queryKey: keys.bench(), queryFn: ({ signal }) => api(standing.getBench, {}, { signal }) });

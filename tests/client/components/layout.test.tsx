@@ -6,15 +6,14 @@ import { announce } from '../../../src/components/ui/announcer.ts';
 import { Caution } from '../../../src/components/ui/caution.tsx';
 import { DataTable } from '../../../src/components/ui/data-table.tsx';
 import { Dialog } from '../../../src/components/ui/dialog.tsx';
+import { Disclosure } from '../../../src/components/ui/disclosure.tsx';
 import { LiveRegion } from '../../../src/components/ui/live-region.tsx';
 import { MeasureRow, MeasureTable } from '../../../src/components/ui/measure-table.tsx';
-import { Menu, MenuChoices, MenuItem } from '../../../src/components/ui/menu.tsx';
 import { Notice } from '../../../src/components/ui/notice.tsx';
 import { ProgressBar } from '../../../src/components/ui/progress-bar.tsx';
 import { RelativeDay } from '../../../src/components/ui/relative-day.tsx';
 import { Sheet } from '../../../src/components/ui/sheet.tsx';
 import { Stamp } from '../../../src/components/ui/stamp.tsx';
-import { Tabs } from '../../../src/components/ui/tabs.tsx';
 import { TopStrip } from '../../../src/components/ui/top-strip.tsx';
 
 describe('sheets and tables', () => {
@@ -148,64 +147,53 @@ describe('what opens', () => {
     await vi.waitFor(() => expect(screen.getByRole('main')).toHaveFocus());
   });
 
-  it('neither dialog nor menu writes a style sheet into the page, which the security policy would refuse', async () => {
+  it('a dialog writes no style sheet into the page, which the security policy would refuse', async () => {
     const sheetsBefore = document.querySelectorAll('style').length;
-    render(
-      <>
-        <Asking />
-        <Menu trigger={<button>Ines Aldgrove</button>}>
-          <MenuItem>Account</MenuItem>
-        </Menu>
-      </>,
-    );
+    render(<Asking />);
     await userEvent.click(screen.getByRole('button', { name: 'Offer another day' }));
     expect(screen.getByRole('dialog')).toBeVisible();
-    await userEvent.keyboard('{Escape}');
-    await userEvent.click(screen.getByRole('button', { name: 'Ines Aldgrove' }));
-    expect(screen.getByRole('menu')).toBeVisible();
     expect(document.querySelectorAll('style').length).toBe(sheetsBefore);
   });
 
-  it('a menu opens and chooses by keyboard', async () => {
-    const onSelect = vi.fn();
-    const onChoose = vi.fn();
+  it('a disclosure opens by keyboard and gives the focus back at Escape', async () => {
     render(
-      <Menu trigger={<button>Ines Aldgrove</button>}>
-        <MenuItem onSelect={onSelect}>Account</MenuItem>
-        <MenuChoices
-          label="Light"
-          value="light"
-          onChoose={onChoose}
-          options={[
-            { value: 'light', label: 'Day' },
-            { value: 'dark', label: 'Night bench' },
-          ]}
-        />
-      </Menu>,
+      <Disclosure label="Ines Aldgrove" buttonClassName="">
+        <a href="#account">Account</a>
+      </Disclosure>,
     );
+    const opener = screen.getByRole('button', { name: 'Ines Aldgrove' });
+    expect(screen.queryByRole('link', { name: 'Account' })).toBeNull();
     await userEvent.tab();
-    await userEvent.keyboard('{Enter}{Enter}');
-    expect(onSelect).toHaveBeenCalledTimes(1);
     await userEvent.keyboard('{Enter}');
-    expect(screen.getByRole('menuitemradio', { name: 'Day' })).toBeChecked();
-    await userEvent.keyboard('{ArrowDown}{ArrowDown}{Enter}');
-    expect(onChoose).toHaveBeenCalledWith('dark');
+    expect(opener).toHaveAttribute('aria-expanded', 'true');
+    await userEvent.tab();
+    expect(screen.getByRole('link', { name: 'Account' })).toHaveFocus();
+    await userEvent.keyboard('{Escape}');
+    expect(opener).toHaveFocus();
+    expect(screen.queryByRole('link', { name: 'Account' })).toBeNull();
   });
 
-  it('tabs move by arrow keys', async () => {
+  it('a disclosure closes at a press elsewhere, when the focus leaves it, and after a link of its own', async () => {
     render(
-      <Tabs
-        label="Sheets"
-        tabs={[
-          { id: 'a', label: 'Readings', content: 'Six readings' },
-          { id: 'b', label: 'Pictures', content: 'Two pictures' },
-        ]}
-      />,
+      <>
+        <Disclosure label="Ines Aldgrove" buttonClassName="">
+          <a href="#account">Account</a>
+        </Disclosure>
+        <button>Elsewhere</button>
+      </>,
     );
-    await userEvent.tab();
-    await userEvent.keyboard('{ArrowRight}');
-    expect(screen.getByRole('tab', { name: 'Pictures' })).toHaveAttribute('aria-selected', 'true');
-    expect(screen.getByRole('tabpanel')).toHaveTextContent('Two pictures');
+    const opener = screen.getByRole('button', { name: 'Ines Aldgrove' });
+    const leavings = [
+      () => userEvent.click(screen.getByRole('button', { name: 'Elsewhere' })),
+      () => userEvent.tab().then(() => userEvent.tab()),
+      () => userEvent.click(screen.getByRole('link', { name: 'Account' })),
+    ];
+    for (const leave of leavings) {
+      await userEvent.click(opener);
+      expect(opener).toHaveAttribute('aria-expanded', 'true');
+      await leave();
+      expect(opener).toHaveAttribute('aria-expanded', 'false');
+    }
   });
 
   it('the strip opens its places on a phone, and closes at Escape and after a link', async () => {

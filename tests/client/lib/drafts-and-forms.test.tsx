@@ -4,6 +4,7 @@ import userEvent from '@testing-library/user-event';
 import type { ReactNode } from 'react';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { createShop } from '../../../shared/contracts/shops.ts';
+import { FormFrame } from '../../../src/components/form-frame.tsx';
 import { ProblemNotice } from '../../../src/components/problem-notice.tsx';
 import { Button } from '../../../src/components/ui/button.tsx';
 import { Field } from '../../../src/components/ui/field.tsx';
@@ -92,12 +93,7 @@ function OpenShop({ onDone }: { onDone?: () => void }) {
   });
   const { values, set, errorAt } = form;
   return (
-    <form
-      onSubmit={(event) => {
-        event.preventDefault();
-        form.submit();
-      }}
-    >
+    <FormFrame form={form}>
       <Field label="Name" error={errorAt('name')}>
         <TextInput value={values.name} onChange={(event) => set('name', event.target.value)} />
       </Field>
@@ -112,7 +108,7 @@ function OpenShop({ onDone }: { onDone?: () => void }) {
       </Button>
       {form.isDraft && <span>draft kept</span>}
       <ProblemNotice problem={form.act.problem} />
-    </form>
+    </FormFrame>
   );
 }
 

@@ -125,14 +125,19 @@ function Accept({
   );
 }
 
-/** What an invitation offers, and the way to take it. The token stays in the page and in no address that is sent anywhere. */
+/** What an invitation offers, and the way to take it. The token stays in this tab and in no address that is sent anywhere. */
 export function InvitationCard({
   token,
   signedInAs,
+  leaving,
+  onLeave,
   onJoined,
 }: {
   token: string;
   signedInAs: string | null;
+  /** The reader signs out, to go on as the one who is invited. */
+  leaving: boolean;
+  onLeave: () => void;
   onJoined: (commissionId: string | null) => void;
 }) {
   const [preview, setPreview] = useState<Preview | null>(null);
@@ -153,18 +158,25 @@ export function InvitationCard({
         {preview.roles.join(', ')}.
       </p>
       {wrongPerson ? (
-        <p>
-          This invitation is for {preview.email}; you are signed in as {signedInAs}. Sign out and open the link again.
-        </p>
+        <div className="grid gap-4">
+          <p>
+            This invitation is for {preview.email}; you are signed in as {signedInAs}.
+          </p>
+          <div>
+            <Button variant="outline" busy={leaving} onClick={onLeave}>
+              Sign out and go on as {preview.email}
+            </Button>
+          </div>
+        </div>
       ) : (
         <>
           {signedInAs === null && (
             <p className="pb-4 text-note">
               Do you have an account already?{' '}
-              <Link to="/sign-in" className="underline">
+              <Link to="/sign-in?back=/invitation" className="underline">
                 Sign in
-              </Link>{' '}
-              and open the link again; it stays good.
+              </Link>
+              , and you come back here.
             </p>
           )}
           <Accept token={token} preview={preview} signedIn={signedInAs !== null} onJoined={onJoined} />

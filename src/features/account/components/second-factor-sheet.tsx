@@ -9,6 +9,7 @@ import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
 import { Field } from '../../../components/ui/field.tsx';
 import { Notice } from '../../../components/ui/notice.tsx';
+import { Fold } from '../../../components/ui/fold.tsx';
 import { Sheet } from '../../../components/ui/sheet.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
 import { announce } from '../../../components/ui/announcer.ts';
@@ -89,8 +90,7 @@ function TakeOff() {
   const [code, setCode] = useState('');
   const remove = useAct(removeSecondFactor, { stale: () => [keys.me()] });
   return (
-    <details>
-      <summary className="min-h-thumb cursor-pointer py-2 text-note">Take the second factor off</summary>
+    <Fold summary="Take the second factor off">
       <form
         className="grid gap-4"
         onSubmit={(event) => {
@@ -122,7 +122,7 @@ function TakeOff() {
         </div>
         <ProblemNotice problem={remove.problem} />
       </form>
-    </details>
+    </Fold>
   );
 }
 

@@ -1,5 +1,5 @@
 import type { ReworkNoteView } from '../../../../shared/contracts/fit-reports.ts';
-import { formatMm } from '../../../../shared/units/length.ts';
+import { formatDifference, formatLength, type LengthUnit } from '../../../../shared/units/length.ts';
 import { MeasureRow, MeasureTable } from '../../../components/ui/measure-table.tsx';
 import { Sheet } from '../../../components/ui/sheet.tsx';
 import { Stamp } from '../../../components/ui/stamp.tsx';
@@ -25,10 +25,12 @@ export function NoteSheet({
   note,
   nameOf,
   sideNames,
+  unit,
 }: {
   note: ReworkNoteView;
   nameOf: (partyId: string) => string;
   sideNames: { hole: string; shaft: string };
+  unit: LengthUnit;
 }) {
   return (
     <Sheet
@@ -46,10 +48,10 @@ export function NoteSheet({
         <MeasureRow
           emphasised
           label={`Off the ${sideNames[note.cutSide]}, on diameter`}
-          value={formatMm(note.removeOnDiameterUm / 1000)}
+          value={formatDifference(note.removeOnDiameterUm, unit)}
         />
-        <MeasureRow label="per side" value={formatMm(note.removeOnDiameterUm / 2000)} />
-        {note.overLengthMm !== null && <MeasureRow label="over" value={formatMm(note.overLengthMm, 1)} />}
+        <MeasureRow label="per side" value={formatDifference(note.removeOnDiameterUm / 2, unit)} />
+        {note.overLengthMm !== null && <MeasureRow label="over" value={formatLength(note.overLengthMm, unit)} />}
         <MeasureRow label="Shows when closed" value={note.shows ? note.whereItShows : 'no'} />
         <MeasureRow
           label="Cost"

@@ -62,7 +62,7 @@ export function RaiseForm({ commissionId, jointId, legs, onRaised }: RaiseFormPr
       </Field>
       {open.length > 0 && (
         <Checkbox
-          label="Work can not go on until this is settled"
+          label="Work cannot go on until this is settled"
           checked={blocking}
           onChange={(event) => setBlocking(event.target.checked)}
         />

@@ -1,14 +1,18 @@
+import type { QueryKey } from '@tanstack/react-query';
 import { useState } from 'react';
 import * as contracts from '../../../../shared/contracts/fit-reports.ts';
 import type { FitReportDetail } from '../../../../shared/contracts/fit-reports.ts';
+import type { RouteInput } from '../../../../shared/contracts/route.ts';
 import { mayDo } from '../../../../shared/abilities/ability.ts';
 import { openReportActs } from '../../../../shared/engines/reports/report-states.ts';
+import { FormFrame } from '../../../components/form-frame.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
+import { Fold } from '../../../components/ui/fold.tsx';
 import { Field } from '../../../components/ui/field.tsx';
 import { TextArea } from '../../../components/ui/text-area.tsx';
 import { useAct } from '../../../hooks/use-act.ts';
-import { useDraft } from '../../../hooks/use-draft.ts';
+import { useContractForm } from '../../../hooks/use-contract-form.ts';
 import { useSight } from '../../../hooks/use-membership.ts';
 import { keys } from '../../../lib/query-keys.ts';
 
@@ -25,45 +29,55 @@ interface ActsProps {
   detail: FitReportDetail;
 }
 
-/** An act that needs words: the words are kept as a draft until it is done. */
-function WordedAct({
+type WordedRoute = typeof contracts.askOtherLimits | typeof contracts.finishRework | typeof contracts.withdrawFitReport;
+
+/** An act that needs words: they are kept as a draft until the act is done. */
+function WordedAct<T extends WordedRoute>({
+  route,
   name,
   label,
   button,
+  said,
   required,
-  onSend,
-  pending,
+  toInput,
+  stale,
+  onDone,
 }: {
+  route: T;
   name: string;
   label: string;
   button: string;
+  said: string;
   required: boolean;
-  onSend: (words: string, forget: () => void) => void;
-  pending: boolean;
+  toInput: (words: string) => RouteInput<T>;
+  stale: () => readonly QueryKey[];
+  onDone?: () => void;
 }) {
-  const [words, setWords, forget] = useDraft(name, '');
+  const form = useContractForm<T, { words: string }>(route, {
+    name,
+    initial: { words: '' },
+    toInput: ({ words }) => toInput(words),
+    stale,
+    said,
+    ...(onDone ? { onDone } : {}),
+  });
   return (
-    <form
-      className="grid gap-3"
-      onSubmit={(event) => {
-        event.preventDefault();
-        onSend(words, forget);
-      }}
-    >
-      <Field label={label} optional={!required}>
+    <FormFrame form={form}>
+      <Field label={label} optional={!required} error={form.errorAt('words')}>
         <TextArea
-          value={words}
+          value={form.values.words}
           required={required}
           maxLength={2000}
-          onChange={(event) => setWords(event.target.value)}
+          onChange={(event) => form.set('words', event.target.value)}
         />
       </Field>
       <div>
-        <Button type="submit" variant="outline" busy={pending}>
+        <Button type="submit" variant="outline" busy={form.act.pending}>
           {button}
         </Button>
       </div>
-    </form>
+      <ProblemNotice problem={form.act.problem} />
+    </FormFrame>
   );
 }
 
@@ -74,12 +88,9 @@ export function ReportActs({ commissionId, detail }: ActsProps) {
   const [asking, setAsking] = useState(false);
   const params = { commissionId, reportId: report.id };
   const stale = () => staleAfterReport(commissionId, report.id);
-  const agree = useAct(contracts.agreeToRework, { stale });
-  const ask = useAct(contracts.askOtherLimits, { stale, onDone: () => setAsking(false) });
-  const start = useAct(contracts.startRework, { stale });
-  const finish = useAct(contracts.finishRework, { stale });
-  const verify = useAct(contracts.verifyRework, { stale });
-  const withdraw = useAct(contracts.withdrawFitReport, { stale });
+  const agree = useAct(contracts.agreeToRework, { stale, said: 'The rework is agreed.' });
+  const start = useAct(contracts.startRework, { stale, said: 'The rework has begun.' });
+  const verify = useAct(contracts.verifyRework, { stale, said: 'The verification is kept.' });
   const latest = notes.at(-1);
   const note = latest && latest.state !== 'other-limits-asked' ? latest : null;
   const facts = { commissionId, raisedByPartyId: report.raisedByPartyId, answerPartyId: report.answerPartyId };
@@ -88,7 +99,7 @@ export function ReportActs({ commissionId, detail }: ActsProps) {
   );
   const may = (action: 'agree' | 'rework' | 'verify' | 'withdraw') => mayDo(ability, action, 'FitReport', facts);
   const { revision } = report;
-  const problem = [agree, ask, start, finish, verify, withdraw].map((act) => act.problem).find(Boolean) ?? null;
+  const problem = [agree, start, verify].map((act) => act.problem).find(Boolean) ?? null;
   const waitsForClient = report.state === 'agreed' && note?.shows && note.consent?.state === 'asked';
 
   return (
@@ -105,15 +116,15 @@ export function ReportActs({ commissionId, detail }: ActsProps) {
       )}
       {asking && note && (
         <WordedAct
+          route={contracts.askOtherLimits}
           name={`other-limits-${report.id}`}
           label="What should be different"
           button="Ask for another answer"
+          said="Another answer is asked for."
           required
-          pending={ask.pending}
-          onSend={(words, forget) => {
-            ask.run({ params, body: { revision, noteId: note.id, words } });
-            forget();
-          }}
+          toInput={(words) => ({ params, body: { revision, noteId: note.id, words } })}
+          stale={stale}
+          onDone={() => setAsking(false)}
         />
       )}
       {waitsForClient && (
@@ -130,15 +141,14 @@ export function ReportActs({ commissionId, detail }: ActsProps) {
       )}
       {open.has('finish-rework') && may('rework') && (
         <WordedAct
+          route={contracts.finishRework}
           name={`finish-${report.id}`}
           label="What was done"
           button="The rework is done"
+          said="The rework is marked as done."
           required={false}
-          pending={finish.pending}
-          onSend={(words, forget) => {
-            finish.run({ params, body: { revision, words } });
-            forget();
-          }}
+          toInput={(words) => ({ params, body: { revision, words } })}
+          stale={stale}
         />
       )}
       {open.has('verify-pass') && may('verify') && (
@@ -162,20 +172,18 @@ export function ReportActs({ commissionId, detail }: ActsProps) {
         </div>
       )}
       {open.has('withdraw') && may('withdraw') && (
-        <details>
-          <summary className="min-h-thumb cursor-pointer py-2 text-note">Take this report back</summary>
+        <Fold summary="Take this report back">
           <WordedAct
+            route={contracts.withdrawFitReport}
             name={`withdraw-${report.id}`}
             label="Why it is taken back"
             button="Take the report back"
+            said="The report is taken back."
             required
-            pending={withdraw.pending}
-            onSend={(words, forget) => {
-              withdraw.run({ params, body: { revision, words } });
-              forget();
-            }}
+            toInput={(words) => ({ params, body: { revision, words } })}
+            stale={stale}
           />
-        </details>
+        </Fold>
       )}
       <ProblemNotice problem={problem} />
     </div>

@@ -3,6 +3,7 @@ import { writeClientWords } from '../../../../shared/contracts/fit-reports.ts';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
 import { Field } from '../../../components/ui/field.tsx';
+import { Fold } from '../../../components/ui/fold.tsx';
 import { Sheet } from '../../../components/ui/sheet.tsx';
 import { Stamp } from '../../../components/ui/stamp.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
@@ -58,8 +59,7 @@ export function ReportHead({
           failed.
         </p>
       )}
-      <details className="pt-3">
-        <summary className="min-h-thumb cursor-pointer py-2 text-note">What happened so far</summary>
+      <Fold summary="What happened so far">
         <ol className="grid gap-1 text-note">
           {events.map((event) => (
             <li key={event.id}>
@@ -69,7 +69,7 @@ export function ReportHead({
             </li>
           ))}
         </ol>
-      </details>
+      </Fold>
     </Sheet>
   );
 }

@@ -9,6 +9,7 @@ import { Button } from '../../../components/ui/button.tsx';
 import { DateInput } from '../../../components/ui/date-input.tsx';
 import { Field } from '../../../components/ui/field.tsx';
 import { RelativeDay } from '../../../components/ui/relative-day.tsx';
+import { Fold } from '../../../components/ui/fold.tsx';
 import { Sheet } from '../../../components/ui/sheet.tsx';
 import { Stamp } from '../../../components/ui/stamp.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
@@ -131,10 +132,9 @@ function AnswerOffer({ commissionId, handoff, today }: HandoffProps) {
           </div>
         </form>
       )}
-      <details>
-        <summary className="min-h-thumb cursor-pointer py-2 font-semibold text-brass">Offer another day</summary>
+      <Fold strong summary="Offer another day">
         <OfferDay commissionId={commissionId} handoff={handoff} today={today} countering />
-      </details>
+      </Fold>
     </div>
   );
 }
@@ -163,12 +163,9 @@ function OwnOffer({ commissionId, handoff, today }: HandoffProps) {
         </Button>
       </div>
       <ProblemNotice problem={withdraw.problem} />
-      <details>
-        <summary className="min-h-thumb cursor-pointer py-2 font-semibold text-brass">
-          Offer another day instead
-        </summary>
+      <Fold strong summary="Offer another day instead">
         <OfferDay commissionId={commissionId} handoff={handoff} today={today} countering={false} />
-      </details>
+      </Fold>
     </div>
   );
 }
@@ -280,19 +277,15 @@ export function HandoffSheet({
             <AnswerOffer {...shared} />
           )
         ) : handoff.agreedOn ? (
-          <details>
-            <summary className="min-h-thumb cursor-pointer py-2 font-semibold text-brass">
-              Ask to move the agreed day
-            </summary>
+          <Fold strong summary="Ask to move the agreed day">
             <OfferDay {...shared} countering={false} />
-          </details>
+          </Fold>
         ) : (
           <OfferDay {...shared} countering={false} />
         ))}
       {mayDo(ability, 'receive', 'Handoff', facts) && handoff.agreedOn && !handoff.doneOn && <Receive {...shared} />}
       {handoff.offers && handoff.offers.length > 0 && (
-        <details className="mt-3">
-          <summary className="min-h-thumb cursor-pointer py-2 text-note">All offers so far</summary>
+        <Fold summary="All offers so far">
           <ol className="grid gap-1 text-note text-lead-grey">
             {handoff.offers.map((offer) => (
               <li key={offer.id}>
@@ -303,7 +296,7 @@ export function HandoffSheet({
               </li>
             ))}
           </ol>
-        </details>
+        </Fold>
       )}
     </Sheet>
   );

@@ -1,6 +1,6 @@
 import type { JointView, ReadingView } from '../../../../shared/contracts/joints.ts';
 import type { Verdict } from '../../../../shared/engines/fit/clearance.ts';
-import { formatLength, formatMm, formatUm, type LengthUnit } from '../../../../shared/units/length.ts';
+import { formatDifference, formatLength, formatUm, type LengthUnit } from '../../../../shared/units/length.ts';
 import { JointSection } from '../../../components/drawings/joint-section.tsx';
 import { ZoneDrawing } from '../../../components/drawings/zone-drawing.tsx';
 import { Caution } from '../../../components/ui/caution.tsx';
@@ -14,7 +14,7 @@ import { fitOfJoint } from '../fit-of-joint.ts';
 const VERDICTS: Readonly<Record<Verdict, { words: string; tone: Tone }>> = {
   conforms: { words: 'conforms', tone: 'verdigris' },
   'does-not-conform': { words: 'does not conform', tone: 'oxide' },
-  'cannot-be-decided': { words: 'these readings can not decide', tone: 'brass' },
+  'cannot-be-decided': { words: 'these readings cannot decide', tone: 'brass' },
 };
 
 export interface FitSheetProps {
@@ -27,6 +27,7 @@ export interface FitSheetProps {
 export function FitSheet({ joint, readings, unit }: FitSheetProps) {
   const { hole, shaft, result, removal } = fitOfJoint(joint, readings);
   const names = SIDE_WORDS[joint.kind];
+  const inUnit = (valueUm: number): string => formatDifference(valueUm, unit);
   const verdict = result && VERDICTS[result.verdict];
   const cut = removal !== null && removal.onDiameterUm > 0;
   return (
@@ -47,17 +48,17 @@ export function FitSheet({ joint, readings, unit }: FitSheetProps) {
       >
         <MeasureRow
           label="Clearance agreed"
-          value={`${formatMm(joint.clearanceMinUm / 1000)} – ${formatMm(joint.clearanceMaxUm / 1000)}`}
+          value={`${inUnit(joint.clearanceMinUm)} – ${inUnit(joint.clearanceMaxUm)}`}
         />
         {result && (
           <>
             <MeasureRow
               label="Worst pair now"
-              value={formatMm(result.worstPairUm / 1000)}
+              value={inUnit(result.worstPairUm)}
               tone={result.verdict === 'does-not-conform' ? 'oxide' : 'plain'}
             />
-            <MeasureRow label="Mean" value={formatMm(result.meanClearanceUm / 1000)} />
-            <MeasureRow label="Gauge doubt (k = 2)" value={`±${formatMm(result.doubtUm / 1000)}`} />
+            <MeasureRow label="Mean" value={inUnit(result.meanClearanceUm)} />
+            <MeasureRow label="Gauge doubt (k = 2)" value={`±${inUnit(result.doubtUm)}`} />
             <MeasureRow label={`Spread of the ${names.hole}`} value={formatUm(result.hole.spreadUm)} />
             <MeasureRow label={`Spread of the ${names.shaft}`} value={formatUm(result.shaft.spreadUm)} />
           </>
@@ -67,17 +68,17 @@ export function FitSheet({ joint, readings, unit }: FitSheetProps) {
             <MeasureRow
               emphasised
               label={`Take off the ${names.shaft}, on diameter`}
-              value={formatMm(removal.onDiameterUm / 1000)}
+              value={inUnit(removal.onDiameterUm)}
             />
-            <MeasureRow label="per side" value={formatMm(removal.perSideUm / 1000)} />
+            <MeasureRow label="per side" value={inUnit(removal.perSideUm)} />
             <MeasureRow
               label="least and most that reach the range"
-              value={`${formatMm(removal.leastOnDiameterUm / 1000)} – ${formatMm(removal.mostOnDiameterUm / 1000)}`}
+              value={`${inUnit(removal.leastOnDiameterUm)} – ${inUnit(removal.mostOnDiameterUm)}`}
             />
             {joint.hiddenLengthMm !== null && joint.engagementMm !== null && (
               <MeasureRow
                 label="over, stopping short of what shows"
-                value={`${joint.hiddenLengthMm} of ${joint.engagementMm} mm`}
+                value={`${formatLength(joint.hiddenLengthMm, unit)} of ${formatLength(joint.engagementMm, unit)}`}
               />
             )}
           </>
@@ -100,7 +101,7 @@ export function FitSheet({ joint, readings, unit }: FitSheetProps) {
           holeDiameterMm={result.hole.minMm}
           shaftDiameterMm={result.shaft.maxMm}
           engagementMm={joint.engagementMm}
-          wallMm={joint.nominalMm * 0.12}
+          wallMm={null}
           removal={
             cut
               ? {

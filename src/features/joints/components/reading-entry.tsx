@@ -1,15 +1,15 @@
-import { useRef, useState } from 'react';
+import { useRef } from 'react';
 import { addReadings } from '../../../../shared/contracts/joints.ts';
 import type { JointSide, LengthUnit } from '../../../../shared/contracts/vocabulary.ts';
 import { formatMm, looksLikeUnitMixUp, parseLength } from '../../../../shared/units/length.ts';
+import { FormFrame } from '../../../components/form-frame.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
 import { Field } from '../../../components/ui/field.tsx';
 import { LengthInput } from '../../../components/ui/length-input.tsx';
 import { Select } from '../../../components/ui/select.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
-import { useAct } from '../../../hooks/use-act.ts';
-import { useDraft } from '../../../hooks/use-draft.ts';
+import { useContractForm } from '../../../hooks/use-contract-form.ts';
 import { figureFrom, optionalFigureFrom } from '../../../lib/figures.ts';
 import { keys } from '../../../lib/query-keys.ts';
 
@@ -35,9 +35,24 @@ function troubleWith(text: string, unit: LengthUnit, nominalMm: number): string 
     : undefined;
 }
 
+const filledOf = (texts: readonly string[]): string[] => texts.map((text) => text.trim()).filter((text) => text !== '');
+
+type ReadingValues = Record<'side' | 'unit' | 'resolution' | 'gauge' | 'temperature' | 'humidity', string> & {
+  texts: readonly string[];
+};
+
+const EMPTY_FIELDS: readonly string[] = Array.from({ length: FIELDS_AT_FIRST }, () => '');
+
+/** The values of a pasted column, or of a line that a caliper sent. */
+const columnOf = (pasted: string): string[] =>
+  pasted
+    .split(/[\r\n\t;]+/)
+    .map((line) => line.trim())
+    .filter(Boolean);
+
 /**
  * Readings of one side, typed or sent by a caliper that types like a keyboard: value, Enter, next field. A column pasted
- * into a field fills the fields below it. The texts are kept as a draft until they are saved.
+ * into a field fills the fields below it. All of it is kept as a draft until it is saved.
  */
 export function ReadingEntry({
   commissionId,
@@ -48,80 +63,85 @@ export function ReadingEntry({
   reportId,
   onDone,
 }: ReadingEntryProps) {
-  const [draft, setDraft, forgetDraft] = useDraft(`readings-${jointId}`, '');
-  const [side, setSide] = useState<JointSide>('hole');
-  const [unit, setUnit] = useState<LengthUnit>(preferredUnit);
-  const [resolution, setResolution] = useState('10');
-  const [gauge, setGauge] = useState('');
-  const [temperature, setTemperature] = useState('');
-  const [humidity, setHumidity] = useState('');
-  const list = useRef<HTMLOListElement>(null);
-  const typed = draft.split('\n');
-  const texts = [...typed, ...Array.from({ length: Math.max(0, FIELDS_AT_FIRST - typed.length) }, () => '')];
-  const filled = texts.map((text) => text.trim()).filter((text) => text !== '');
-  const inTrouble = texts.some((text) => troubleWith(text, unit, nominalMm));
-  const save = useAct(addReadings, {
-    stale: () => [keys.joints.detail(commissionId, jointId)],
-    onDone: () => {
-      forgetDraft();
-      onDone?.();
+  const form = useContractForm<typeof addReadings, ReadingValues>(addReadings, {
+    name: `readings-${jointId}`,
+    initial: {
+      // Not chosen for the reader: readings stay with the side they were saved to.
+      side: '',
+      unit: preferredUnit,
+      resolution: '10',
+      gauge: '',
+      temperature: '',
+      humidity: '',
+      texts: EMPTY_FIELDS,
     },
+    toInput: (values) => ({
+      params: { commissionId, jointId },
+      body: {
+        side: values.side as JointSide,
+        reportId,
+        resolutionUm: figureFrom(values.resolution),
+        gauge: values.gauge.trim() || null,
+        temperatureC: optionalFigureFrom(values.temperature),
+        humidityPct: optionalFigureFrom(values.humidity),
+        readings: filledOf(values.texts).map((text) => ({ text, unit: values.unit as LengthUnit })),
+      },
+    }),
+    stale: () => [keys.joints.detail(commissionId, jointId)],
+    said: 'The readings are saved.',
+    ...(onDone ? { onDone } : {}),
   });
-  const setText = (index: number, value: string): void => {
-    const lines = value.split(/[\r\n\t;]+/).map((line) => line.trim());
-    const next = [...texts];
-    if (lines.length > 1) next.splice(index, lines.length, ...lines.filter(Boolean));
-    else next[index] = value;
-    setDraft(next.join('\n').replace(/\n+$/, ''));
-  };
+  const { values, set, errorAt, act } = form;
+  const { side, resolution, gauge, temperature, humidity, texts } = values;
+  const unit = values.unit as LengthUnit;
+  const list = useRef<HTMLOListElement>(null);
+  const filled = filledOf(texts);
+  const inTrouble = texts.some((text) => troubleWith(text, unit, nominalMm));
+  const setText = (index: number, value: string): void => set('texts', texts.with(index, value));
+  const paste = (index: number, column: readonly string[]): void =>
+    set('texts', [...texts.slice(0, index), ...column, ...texts.slice(index + column.length)]);
   const addField = (): void => {
-    setDraft([...texts, ''].join('\n'));
+    set('texts', [...texts, '']);
     requestAnimationFrame(() => list.current?.querySelector<HTMLInputElement>('li:last-child input')?.focus());
   };
 
   return (
-    <form
-      className="grid gap-4"
-      onSubmit={(event) => {
-        event.preventDefault();
-        save.run({
-          params: { commissionId, jointId },
-          body: {
-            side,
-            reportId,
-            resolutionUm: figureFrom(resolution),
-            gauge: gauge.trim() || null,
-            temperatureC: optionalFigureFrom(temperature),
-            humidityPct: optionalFigureFrom(humidity),
-            readings: filled.map((text) => ({ text, unit })),
-          },
-        });
-      }}
-    >
+    <FormFrame form={form}>
       <div className="grid gap-4 sm:grid-cols-3">
-        <Field label="Which part">
-          <Select value={side} onChange={(event) => setSide(event.target.value as JointSide)}>
+        <Field label="Which part" error={errorAt('side')}>
+          <Select value={side} onChange={(event) => set('side', event.target.value)}>
+            <option value="" disabled>
+              Choose
+            </option>
             <option value="hole">{sideNames.hole}</option>
             <option value="shaft">{sideNames.shaft}</option>
           </Select>
         </Field>
         <Field label="Unit of bare numbers">
-          <Select value={unit} onChange={(event) => setUnit(event.target.value as LengthUnit)}>
+          <Select value={unit} onChange={(event) => set('unit', event.target.value)}>
             <option value="mm">mm</option>
             <option value="inch">decimal inch</option>
             <option value="inch-fraction">inch fraction</option>
           </Select>
         </Field>
-        <Field label="Smallest step of the gauge, µm" hint="10 for a digital caliper, 1 for a micrometer">
+        <Field
+          label="Smallest step of the gauge, µm"
+          hint="10 for a digital caliper, 1 for a micrometer"
+          error={errorAt('resolutionUm')}
+        >
           <TextInput
             inputMode="decimal"
             value={resolution}
-            onChange={(event) => setResolution(event.target.value)}
+            onChange={(event) => set('resolution', event.target.value)}
             required
           />
         </Field>
       </div>
-      <ol ref={list} className="grid gap-3 sm:grid-cols-2" aria-label={`Readings of the ${sideNames[side]}`}>
+      <ol
+        ref={list}
+        className="grid gap-3 sm:grid-cols-2"
+        aria-label={side === '' ? 'Readings' : `Readings of the ${sideNames[side as JointSide]}`}
+      >
         {texts.map((text, index) => (
           // Fields have no identity but their place: readings are a column of figures.
           <li key={index}>
@@ -131,10 +151,10 @@ export function ReadingEntry({
                 unit={unit === 'mm' ? 'mm' : 'in'}
                 onChange={(event) => setText(index, event.target.value)}
                 onPaste={(event) => {
-                  const pasted = event.clipboardData.getData('text');
-                  if (!/[\r\n\t]/.test(pasted)) return;
+                  const column = columnOf(event.clipboardData.getData('text'));
+                  if (column.length < 2) return;
                   event.preventDefault();
-                  setText(index, pasted);
+                  paste(index, column);
                 }}
                 onLastEnter={addField}
               />
@@ -143,26 +163,30 @@ export function ReadingEntry({
         ))}
       </ol>
       <div className="grid gap-4 sm:grid-cols-3">
-        <Field label="Gauge" optional>
-          <TextInput value={gauge} maxLength={60} onChange={(event) => setGauge(event.target.value)} />
+        <Field label="Gauge" optional error={errorAt('gauge')}>
+          <TextInput value={gauge} maxLength={60} onChange={(event) => set('gauge', event.target.value)} />
         </Field>
-        <Field label="Temperature, °C" optional>
-          <TextInput inputMode="decimal" value={temperature} onChange={(event) => setTemperature(event.target.value)} />
+        <Field label="Temperature, °C" optional error={errorAt('temperatureC')}>
+          <TextInput
+            inputMode="decimal"
+            value={temperature}
+            onChange={(event) => set('temperature', event.target.value)}
+          />
         </Field>
-        <Field label="Humidity, %" optional>
-          <TextInput inputMode="decimal" value={humidity} onChange={(event) => setHumidity(event.target.value)} />
+        <Field label="Humidity, %" optional error={errorAt('humidityPct')}>
+          <TextInput inputMode="decimal" value={humidity} onChange={(event) => set('humidity', event.target.value)} />
         </Field>
       </div>
       <div className="flex flex-wrap items-center gap-3">
-        <Button type="submit" busy={save.pending} disabled={filled.length === 0 || inTrouble}>
+        <Button type="submit" busy={act.pending} disabled={filled.length === 0 || inTrouble || side === ''}>
           Save {filled.length === 1 ? '1 reading' : `${filled.length} readings`}
         </Button>
         <Button variant="outline" onClick={addField}>
           One more reading
         </Button>
-        {draft !== '' && <span className="text-note text-lead-grey">draft kept</span>}
+        {form.isDraft && <span className="text-note text-lead-grey">draft kept</span>}
       </div>
-      <ProblemNotice problem={save.problem} />
-    </form>
+      <ProblemNotice problem={act.problem} />
+    </FormFrame>
   );
 }

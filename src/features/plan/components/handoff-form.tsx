@@ -11,13 +11,15 @@ import { figureFrom } from '../../../lib/figures.ts';
 import { keys } from '../../../lib/query-keys.ts';
 import { holdersAmong, PartyOptions, toggled, type PlanChoices } from './choices.tsx';
 
-export function AddHandoff({ commissionId, parties, parts, legs }: PlanChoices) {
+/** @param mine parties in whose name the reader acts: one of them is on one side at first */
+export function AddHandoff({ commissionId, parties, parts, legs, mine }: PlanChoices & { mine: ReadonlySet<string> }) {
   const sides = holdersAmong(parties);
+  const own = sides.find((side) => mine.has(side.id)) ?? sides[0];
   const form = useContractForm(createHandoff, {
     name: `handoff-${commissionId}`,
     initial: {
-      from: sides[0]?.id ?? '',
-      to: sides[1]?.id ?? '',
+      from: own?.id ?? '',
+      to: sides.find((side) => side.id !== own?.id)?.id ?? '',
       parts: [] as readonly string[],
       fromLeg: '',
       toLeg: '',
@@ -50,23 +52,23 @@ export function AddHandoff({ commissionId, parties, parts, legs }: PlanChoices) 
   return (
     <FormFrame form={form}>
       <div className="grid gap-4 sm:grid-cols-2">
-        <Field label="From">
-          <Select value={values.from} onChange={(event) => set('from', event.target.value)}>
+        <Field label="From" error={errorAt('fromPartyId')}>
+          <Select value={values.from} onChange={(event) => form.patch({ from: event.target.value, fromLeg: '' })}>
             <PartyOptions parties={sides} />
           </Select>
         </Field>
         <Field label="To" error={errorAt('toPartyId')}>
-          <Select value={values.to} onChange={(event) => set('to', event.target.value)}>
+          <Select value={values.to} onChange={(event) => form.patch({ to: event.target.value, toLeg: '' })}>
             <PartyOptions parties={sides} />
           </Select>
         </Field>
-        <Field label="After the leg" optional>
+        <Field label="After the leg" optional error={errorAt('fromLegId')}>
           <Select value={values.fromLeg} onChange={(event) => set('fromLeg', event.target.value)}>
             <option value="">none</option>
             {legOptions(values.from)}
           </Select>
         </Field>
-        <Field label="Before the leg" optional>
+        <Field label="Before the leg" optional error={errorAt('toLegId')}>
           <Select value={values.toLeg} onChange={(event) => set('toLeg', event.target.value)}>
             <option value="">none</option>
             {legOptions(values.to)}

@@ -96,7 +96,7 @@ function WorkFields({ form: { values, patch, errorAt }, choices: { parties, part
 /** Three estimates and the first day it may start: the lead's and the leg's own shop's. */
 function TimeFields({ form: { values, patch, errorAt } }: Pick<LegFieldsProps, 'form'>) {
   return (
-    <div className="grid gap-4 @sm:grid-cols-2 @lg:grid-cols-4">
+    <div className="grid gap-4 @sm:grid-cols-3">
       <Field label="Hopeful, days" error={errorAt('hopefulDays')}>
         <TextInput
           inputMode="decimal"
@@ -114,7 +114,7 @@ function TimeFields({ form: { values, patch, errorAt } }: Pick<LegFieldsProps, '
       <Field label="Bad, days" error={errorAt('badDays')}>
         <TextInput inputMode="decimal" value={values.bad} onChange={(event) => patch({ bad: event.target.value })} />
       </Field>
-      <Field label="Not before" optional error={errorAt('plannedStartOn')}>
+      <Field className="@sm:col-span-3" label="Not before" optional error={errorAt('plannedStartOn')}>
         <DateInput value={values.plannedStartOn} onChange={(event) => patch({ plannedStartOn: event.target.value })} />
       </Field>
     </div>

@@ -3,6 +3,7 @@ import type { ReactNode } from 'react';
 import type { LegView } from '../../../../shared/contracts/parts-and-legs.ts';
 import { shortDay } from '../../../../shared/units/calendar-day.ts';
 import { EmptyState } from '../../../components/ui/empty-state.tsx';
+import { Fold } from '../../../components/ui/fold.tsx';
 import { Sheet } from '../../../components/ui/sheet.tsx';
 import { Stamp } from '../../../components/ui/stamp.tsx';
 import { useSight } from '../../../hooks/use-membership.ts';
@@ -59,10 +60,7 @@ export function LegsSheet({ choices, actsOf }: { choices: PlanChoices; actsOf: (
             </p>
             {actsOf(leg)}
             {(mine.has(leg.partyId) || roles.has('lead')) && leg.state !== 'finished' && leg.state !== 'dropped' && (
-              <details>
-                <summary className="min-h-thumb cursor-pointer py-2 text-note">
-                  {roles.has('lead') ? 'Change this leg' : 'Change the estimates or the own note'}
-                </summary>
+              <Fold summary={roles.has('lead') ? 'Change this leg' : 'Change the estimates or the own note'}>
                 <EditLeg
                   key={leg.id}
                   choices={choices}
@@ -70,7 +68,7 @@ export function LegsSheet({ choices, actsOf }: { choices: PlanChoices; actsOf: (
                   isLead={roles.has('lead')}
                   isOwn={mine.has(leg.partyId)}
                 />
-              </details>
+              </Fold>
             )}
           </li>
         ))}

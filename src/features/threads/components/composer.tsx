@@ -1,4 +1,4 @@
-import { useRef, useState, type KeyboardEvent } from 'react';
+import { useEffect, useRef, type KeyboardEvent } from 'react';
 import { postMessage } from '../../../../shared/contracts/threads.ts';
 import type { PartyView } from '../../../../shared/contracts/commissions.ts';
 import { PendingFiles } from '../../../components/pending-files.tsx';
@@ -10,7 +10,6 @@ import { TextArea } from '../../../components/ui/text-area.tsx';
 import { useAct } from '../../../hooks/use-act.ts';
 import { useDraft } from '../../../hooks/use-draft.ts';
 import { useUploads } from '../../../hooks/use-uploads.ts';
-import { keys } from '../../../lib/query-keys.ts';
 
 export interface ComposerProps {
   commissionId: string;
@@ -20,6 +19,13 @@ export interface ComposerProps {
   readers: readonly PartyView[];
   onTyped: () => void;
   onSent: () => void;
+}
+
+/** One message as it was tried to send. */
+interface Attempt {
+  id: string;
+  text: string;
+  fileIds: readonly string[];
 }
 
 type Named = PartyView['people'][number];
@@ -36,15 +42,26 @@ const nameBegun = (text: string): string | null => /(?:^|\s)@([\p{L}' -]{0,30})$
  */
 export function Composer({ commissionId, threadId, audience, readers, onTyped, onSent }: ComposerProps) {
   const [text, setText, forgetText] = useDraft(`thread-${threadId}`, '');
-  const [messageId, setMessageId] = useState(() => crypto.randomUUID());
+  const attempt = useRef<Attempt | null>(null);
+  const latestText = useRef(text);
+  useEffect(() => {
+    latestText.current = text;
+  });
   const area = useRef<HTMLTextAreaElement>(null);
   const uploads = useUploads({ commissionId, place: 'thread', placeId: threadId, purpose: 'message' });
   const post = useAct(postMessage, {
-    stale: () => [keys.threads.lists(commissionId)],
+    said: 'Sent.',
     onDone: () => {
-      forgetText();
-      uploads.clear();
-      setMessageId(crypto.randomUUID());
+      const sent = attempt.current;
+      if (!sent) return;
+      // What was written or added while the message was on its way was not in it.
+      const rest = latestText.current.startsWith(sent.text)
+        ? latestText.current.slice(sent.text.length)
+        : latestText.current;
+      if (rest.trim() === '') forgetText();
+      else setText(rest.trimStart());
+      uploads.forget(sent.fileIds);
+      attempt.current = null;
       onSent();
     },
   });
@@ -55,18 +72,17 @@ export function Composer({ commissionId, threadId, audience, readers, onTyped, o
       ? []
       : people.filter((person) => person.displayName.toLowerCase().startsWith(begun.toLowerCase())).slice(0, 5);
   const stored = uploads.files.filter((file) => file.state === 'stored');
-  const onTheWay = uploads.files.some((file) => file.state === 'sending');
+  const unsettled = uploads.files.some((file) => file.state !== 'stored');
   const empty = text.trim() === '' && stored.length === 0;
   const send = (): void => {
-    if (empty || onTheWay || post.pending) return;
+    if (empty || unsettled || post.pending) return;
+    const fileIds = stored.map((file) => file.id);
+    // The same words keep their id over every try; other words are another message, or the first would swallow them.
+    if (attempt.current?.text !== text || attempt.current.fileIds.join() !== fileIds.join())
+      attempt.current = { id: crypto.randomUUID(), text, fileIds };
     post.run({
       params: { commissionId, threadId },
-      body: {
-        id: messageId,
-        body: text,
-        mentionedAccountIds: mentionedIn(text, people),
-        fileIds: stored.map((file) => file.id),
-      },
+      body: { id: attempt.current.id, body: text, mentionedAccountIds: mentionedIn(text, people), fileIds },
     });
   };
   const choose = (person: Named): void => {
@@ -129,7 +145,7 @@ export function Composer({ commissionId, threadId, audience, readers, onTyped, o
       )}
       <PendingFiles uploads={uploads} />
       <div className="flex flex-wrap items-center gap-2">
-        <Button type="submit" busy={post.pending} disabled={empty || onTheWay}>
+        <Button type="submit" busy={post.pending} disabled={empty || unsettled}>
           Send
         </Button>
         <FilePicker

@@ -1,6 +1,5 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { useEffect, useRef } from 'react';
-import { markThreadRead, type ThreadView } from '../../../../shared/contracts/threads.ts';
+import type { ThreadView } from '../../../../shared/contracts/threads.ts';
 import { mayDo } from '../../../../shared/abilities/ability.ts';
 import { Button } from '../../../components/ui/button.tsx';
 import { EmptyState } from '../../../components/ui/empty-state.tsx';
@@ -10,10 +9,10 @@ import { Skeleton } from '../../../components/ui/skeleton.tsx';
 import { Stamp } from '../../../components/ui/stamp.tsx';
 import { useSight } from '../../../hooks/use-membership.ts';
 import { usePartyBook } from '../../../hooks/use-party-names.ts';
-import { api } from '../../../lib/api.ts';
 import { meQuery } from '../../../lib/queries/me.ts';
 import { audienceWords, readersOf } from '../audience-words.ts';
 import { usePresence } from '../use-presence.ts';
+import { useReadUpTo } from '../use-read-up-to.ts';
 import { useThreadMessages } from '../use-thread-messages.ts';
 import { Composer } from './composer.tsx';
 import { MessageRow } from './message-row.tsx';
@@ -31,24 +30,20 @@ export function ThreadSheet({
   const { data: me } = useSuspenseQuery(meQuery());
   const { ability } = useSight(commissionId);
   const { parties, nameOf } = usePartyBook(commissionId);
-  const { messages, lastSequence, pending, failed, hasOlder, loadingOlder, showOlder } = useThreadMessages(
+  const { messages, lastSequence, pending, failed, again, look, hasOlder, loadingOlder, showOlder } = useThreadMessages(
     commissionId,
     thread.id,
   );
   const { here, typed, stopTyping } = usePresence(commissionId, thread.id, me.id);
-  const marked = useRef(thread.readSequence);
+  const end = useReadUpTo({
+    commissionId,
+    threadId: thread.id,
+    readSequence: thread.readSequence,
+    lastSequence,
+  });
   const audience = audienceWords(thread, parties);
   const facts = { commissionId, audience: thread.audience, partyIds: thread.partyIds };
   const typing = here.filter((person) => person.typing).map((person) => person.displayName);
-
-  useEffect(() => {
-    if (lastSequence <= marked.current || document.visibilityState !== 'visible') return;
-    marked.current = lastSequence;
-    // A mark that is lost is made up by the next one: it only ever moves forward.
-    api(markThreadRead, { params: { commissionId, threadId: thread.id }, body: { readSequence: lastSequence } }).catch(
-      () => undefined,
-    );
-  }, [commissionId, thread.id, lastSequence]);
 
   return (
     <Sheet
@@ -57,8 +52,17 @@ export function ThreadSheet({
       stamp={<Stamp tone={thread.audience === 'everyone' ? 'gun-blue' : 'verdigris'}>{audience}</Stamp>}
     >
       {failed && (
-        <Notice kind="alert" tone="oxide" title="The messages could not be read">
-          What you write is kept. They come as soon as the connection is back.
+        <Notice
+          kind="alert"
+          tone="oxide"
+          title="The messages could not be read"
+          actions={
+            <Button variant="outline" onClick={again}>
+              Try again
+            </Button>
+          }
+        >
+          What you write is kept.
         </Notice>
       )}
       {pending && !failed && <Skeleton label="Reading the messages" lines={3} />}
@@ -67,7 +71,9 @@ export function ThreadSheet({
           Show earlier messages
         </Button>
       )}
-      {!pending && messages.length === 0 && <EmptyState title="Nothing written yet">Read by: {audience}.</EmptyState>}
+      {!pending && !failed && messages.length === 0 && (
+        <EmptyState title="Nothing written yet">Read by: {audience}.</EmptyState>
+      )}
       <div role="log" aria-label={`Messages in ${thread.title}`} data-testid={`thread-${thread.audience}`}>
         <ol>
           {messages.map((message) => (
@@ -81,6 +87,7 @@ export function ThreadSheet({
           ))}
         </ol>
       </div>
+      <div ref={end} />
       <p className="min-h-6 py-1 text-note text-lead-grey" aria-live="polite">
         {typing.length > 0
           ? `${typing.join(', ')} ${typing.length === 1 ? 'is' : 'are'} writing`
@@ -95,7 +102,10 @@ export function ThreadSheet({
           audience={audience}
           readers={readersOf(thread, parties)}
           onTyped={typed}
-          onSent={stopTyping}
+          onSent={() => {
+            stopTyping();
+            look();
+          }}
         />
       )}
     </Sheet>
