@@ -4,25 +4,25 @@ import { buildApp, type BuiltApp } from './app.ts';
 import type { Env } from './config/env.ts';
 import { createDataSource } from './db/data-source.ts';
 import { runMigrations } from './db/migrate.ts';
-import { forgetOldKeys } from './http/idempotency.ts';
 import { createLimits } from './http/limits.ts';
 import { createSessionMiddleware } from './http/middleware/session.ts';
 import { createMailer } from './integrations/mail/create-mailer.ts';
 import { createStorage } from './integrations/storage/create-storage.ts';
 import { createLogger, type Logger } from './logging/logger.ts';
 import { sendLetter } from './outbox/handlers/send-letter.ts';
-import { forgetSentMessages, OutboxRelay } from './outbox/relay.ts';
+import { OutboxRelay } from './outbox/relay.ts';
 import { Hub } from './realtime/hub.ts';
 import type { Services } from './services.ts';
+import { sweep } from './sweep.ts';
 
 export interface RunningProcess {
   readonly log: Logger;
   readonly services: Services;
   readonly built: BuiltApp;
   readonly hub: Hub;
-  readonly relay: OutboxRelay;
+  readonly relays: readonly OutboxRelay[];
   readonly port: number;
-  /** Readiness off, no new connections, requests under way finished, sockets closed, outbox flushed, database let go. */
+  /** Readiness off, no new connections, requests under way finished, sockets closed, what is being sent sent, database let go. Letters still in the outbox go out at the next start. */
   stop(): Promise<void>;
 }
 
@@ -48,23 +48,22 @@ export async function startProcess(
     storage: createStorage(env),
     limits: createLimits(env.DATABASE_URL, env.RELAXED_LIMITS ? 1000 : 1),
     clock,
-    wakeRelay: () => relay.wake(),
+    wakeRelay: () => relays.forEach((relay) => relay.wake()),
     endConnections: (accountId) => hub.disconnectAccount(accountId),
   };
   const session = createSessionMiddleware(db, env);
   const built = buildApp(services, session.middleware);
   http.on('request', built.app);
   const hub = new Hub(http, services, session.middleware);
-  const relay = new OutboxRelay(db, log, {
-    event: hub.sendEvent,
-    mail: (message) => sendLetter(mailer, env, message),
-  });
-  relay.start();
-  const sweep = setInterval(() => {
-    Promise.all([forgetOldKeys(db.manager), forgetSentMessages(db)]).catch((error: unknown) =>
-      log.warn({ err: error }, 'sweep failed'),
-    );
-  }, HOUR_MS);
+  const relays = [
+    new OutboxRelay(db, log, 'event', hub.sendEvent),
+    new OutboxRelay(db, log, 'mail', (message) => sendLetter(mailer, env, message)),
+  ];
+  for (const relay of relays) relay.start();
+  const sweepNow = (): void =>
+    void sweep(db, env, clock()).catch((error: unknown) => log.warn({ err: error }, 'sweep failed'));
+  sweepNow();
+  const sweepTimer = setInterval(sweepNow, HOUR_MS);
   await new Promise<void>((resolve, reject) => {
     http.once('error', reject);
     http.listen(env.PORT, env.HOST, resolve);
@@ -77,18 +76,19 @@ export async function startProcess(
     services,
     built,
     hub,
-    relay,
+    relays,
     port,
     async stop() {
       built.setReady(false);
-      clearInterval(sweep);
+      clearInterval(sweepTimer);
       const closed = new Promise<void>((resolve) => http.close(() => resolve()));
-      await hub.close();
-      http.closeIdleConnections();
+      // Before the sockets are closed: that waits for requests under way too, and one of them may never end.
       const cut = setTimeout(() => http.closeAllConnections(), DRAIN_MS);
+      http.closeIdleConnections();
+      await hub.close();
       await closed;
       clearTimeout(cut);
-      await relay.stop();
+      await Promise.all(relays.map((relay) => relay.stop()));
       session.close();
       await services.limits.close();
       await db.destroy();

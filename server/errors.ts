@@ -74,8 +74,15 @@ const CONSTRAINT_PROBLEMS: Record<string, [ProblemCode, string]> = {
 const constraintOf = (thrown: { driverError: unknown }): string | undefined =>
   (thrown.driverError as { constraint?: string }).constraint;
 
+/** True when a statement broke this constraint. */
+export const isConstraint = (thrown: unknown, name: string): boolean =>
+  thrown instanceof QueryFailedError && constraintOf(thrown) === name;
+
 /** Codes of pg and of the network that mean "not now": the database is restarting or cannot be reached. */
 const OUTAGE = new Set(['57P01', '57P03', '08006', '08001', 'ECONNREFUSED', 'ECONNRESET', '53300']);
+
+/** Two transactions were in each other's way and this one gave way: nothing of it is left, and it can be tried again. */
+const GAVE_WAY = new Set(['40P01', '40001']);
 
 function asAppError(thrown: unknown): AppError {
   if (thrown instanceof AppError) return thrown;
@@ -90,9 +97,17 @@ function asAppError(thrown: unknown): AppError {
       'Ferrule cannot reach its database just now. Nothing was saved; try again in a moment.',
       { retryAfterS: 2 },
     );
+  if (typeof code === 'string' && GAVE_WAY.has(code))
+    return new AppError('busy', 'Someone else was at the same thing. Nothing was saved; try again.', {
+      retryAfterS: 1,
+    });
   const status = (thrown as { status?: unknown } | null)?.status;
   if (status === 413) return new AppError('too-large');
-  if (status === 400) return new AppError('malformed-request', 'The body is not the JSON it says it is.');
+  if (status === 404) return new AppError('not-found');
+  if (status === 415)
+    return new AppError('malformed-request', 'The body is in an encoding that is not read here; send UTF-8.');
+  if (status === 400)
+    return new AppError('malformed-request', 'The body is not the JSON it says it is, or the address cannot be read.');
   return new AppError(
     'unexpected',
     'Nothing was saved. Try again; if it happens again, tell your steward the request number.',

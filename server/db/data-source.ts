@@ -18,7 +18,8 @@ export const dataSourceOptions = (url: string, poolSize: number): DataSourceOpti
   uuidExtension: 'pgcrypto',
   poolSize,
   applicationName: 'ferrule',
-  extra: { connectionTimeoutMillis: 10_000 },
+  // A day that the database works out is a day in UTC, wherever its server stands.
+  extra: { connectionTimeoutMillis: 10_000, options: '-c timezone=UTC' },
 });
 
 export const createDataSource = (url: string, poolSize = 10): DataSource =>

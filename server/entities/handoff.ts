@@ -50,6 +50,13 @@ export class Handoff {
   @Column({ type: 'date', nullable: true })
   doneOn!: string | null;
 
+  /** Set when it will not come about; it is then in no plan and no list. */
+  @Column({ type: 'timestamptz', nullable: true })
+  droppedAt!: Date | null;
+
+  @Column({ type: 'text', default: '' })
+  droppedWords!: string;
+
   @Column({ type: 'int', default: 1 })
   revision!: number;
 }

@@ -1,4 +1,5 @@
 import type { Request } from 'express';
+import { unstorableIn } from './unstorable.ts';
 import type { AnyRoute, ParsedInput } from '../../shared/contracts/route.ts';
 import { pointersOf } from '../../shared/problems/pointers.ts';
 import { InputInvalid, NotFound } from '../errors.ts';
@@ -10,9 +11,12 @@ export function parseInput<T extends AnyRoute>(route: T, req: Request): ParsedIn
   const query = route.query.safeParse(req.query);
   const body = route.body.safeParse(req.body ?? {});
   const errors = [
+    ...unstorableIn('query', req.query),
+    ...unstorableIn('body', req.body),
     ...(query.success ? [] : pointersOf('query', query.error.issues)),
     ...(body.success ? [] : pointersOf('body', body.error.issues)),
   ];
-  if (errors.length > 0) throw new InputInvalid(errors);
+  const firstAt = new Map(errors.toReversed().map((error) => [error.pointer, error]));
+  if (errors.length > 0) throw new InputInvalid(errors.filter((error) => firstAt.get(error.pointer) === error));
   return { params: params.data, query: query.data, body: body.data } as ParsedInput<T>;
 }

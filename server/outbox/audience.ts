@@ -2,7 +2,10 @@ import type { EntityManager } from 'typeorm';
 
 /** Who hears an event, by rule and not by list, so that a party that left a moment ago hears nothing. */
 export type EventAudience =
-  /** Everyone with a part in the commission, the client included; guests only where their ticks allow. */
+  /**
+   * Everyone with a part in the commission, client and guests included: such an event says that something changed, and
+   * what may be read of it is for the ability to say.
+   */
   | { to: 'everyone'; commissionId: string }
   /** Shops of the commission. */
   | { to: 'shops'; commissionId: string }
@@ -46,7 +49,7 @@ export async function keysOf(manager: EntityManager, audience: EventAudience): P
         `SELECT COALESCE(p."shop_id", p."account_id") AS key
            FROM "thread" t JOIN "party" p ON p."commission_id" = t."commission_id"
           WHERE t."id" = $1 AND p."left_at" IS NULL AND (p."sees_until" IS NULL OR p."sees_until" >= CURRENT_DATE)
-            AND (p."id" = ANY(t."party_ids")
+            AND ((p."id" = ANY(t."party_ids") AND NOT 'guest' = ANY(p."roles"))
               OR (t."audience" = 'everyone' AND (NOT 'guest' = ANY(p."roles") OR 'threads' = ANY(p."guest_sees")))
               OR (t."audience" = 'makers' AND p."shop_id" IS NOT NULL)
               OR (t."audience" = 'named' AND 'lead' = ANY(p."roles")))`,

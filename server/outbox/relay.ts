@@ -11,29 +11,37 @@ export interface OutgoingMessage {
 export type OutboxHandler = (message: OutgoingMessage) => Promise<void>;
 
 const LEASE_S = 30;
-const BATCH = 100;
 const IDLE_POLL_MS = 1000;
+/** Events are marked a batch at a time, for hearing one twice is nothing; letters one by one, for getting one twice is noticed. */
+const BATCHES = { event: 100, mail: 1 } as const;
+/** About a day of tries; a letter that nobody takes for so long is told to the steward's log, and its link's token is dropped. */
+const GIVE_UP_AFTER = 150;
+
+export type OutboxKind = keyof typeof BATCHES;
 /** A message that fails waits twice as long each time, up to ten minutes. */
 const backoffS = (attempts: number): number => Math.min(600, 2 ** attempts);
 
 /**
  * Sends what committed transactions left in the outbox: claim under a lease, commit, send, mark. Delivery is at least
  * once; a crash between send and mark sends again, so handlers are idempotent. Rows are found by `sent_at IS NULL` and
- * not by "id above the last", since ids do not follow the order of commits.
+ * not by "id above the last", since ids do not follow the order of commits. Each kind has a relay of its own: a mail
+ * server that does not answer must not hold up what is said in a thread.
  */
 export class OutboxRelay {
   readonly #db: DataSource;
   readonly #log: Logger;
-  readonly #handlers: Readonly<Record<'event' | 'mail', OutboxHandler>>;
+  readonly #kind: OutboxKind;
+  readonly #handle: OutboxHandler;
   #timer: NodeJS.Timeout | undefined;
   #running: Promise<void> | undefined;
   #again = false;
   #stopped = false;
 
-  constructor(db: DataSource, log: Logger, handlers: Readonly<Record<'event' | 'mail', OutboxHandler>>) {
+  constructor(db: DataSource, log: Logger, kind: OutboxKind, handle: OutboxHandler) {
     this.#db = db;
     this.#log = log;
-    this.#handlers = handlers;
+    this.#kind = kind;
+    this.#handle = handle;
   }
 
   start(): void {
@@ -71,7 +79,7 @@ export class OutboxRelay {
       const heard: string[] = [];
       for (const message of batch) if (await this.#send(message)) heard.push(message.id);
       if (heard.length > 0) await this.#markSent(heard);
-      if (batch.length < BATCH || this.#stopped) return;
+      if (batch.length < BATCHES[this.#kind] || this.#stopped) return;
     }
   }
 
@@ -79,24 +87,27 @@ export class OutboxRelay {
     const [rows] = await this.#db.query<[OutgoingMessage[], number]>(
       `UPDATE "outbox_message" SET "leased_until" = now() + make_interval(secs => $1), "attempts" = "attempts" + 1
         WHERE "id" IN (
-          SELECT "id" FROM "outbox_message" WHERE "sent_at" IS NULL AND ("leased_until" IS NULL OR "leased_until" < now())
+          SELECT "id" FROM "outbox_message"
+           WHERE "sent_at" IS NULL AND ("leased_until" IS NULL OR "leased_until" < now()) AND starts_with("topic", $3)
            ORDER BY "id" LIMIT $2 FOR UPDATE SKIP LOCKED)
         RETURNING "id", "topic", "payload", "attempts"`,
-      [LEASE_S, BATCH],
+      [LEASE_S, BATCHES[this.#kind], `${this.#kind}:`],
     );
     return rows.sort((one, other) => (BigInt(one.id) < BigInt(other.id) ? -1 : 1));
   }
 
-  /** @returns whether the message is still to be marked: events are marked a batch at a time, a letter at once. */
+  /** @returns whether the message is done with */
   async #send(message: OutgoingMessage): Promise<boolean> {
-    const kind = message.topic.startsWith('mail:') ? 'mail' : 'event';
+    const about = { topic: message.topic, attempts: message.attempts };
     try {
-      await this.#handlers[kind](message);
-      // Hearing an event twice is nothing; getting a letter twice is noticed.
-      if (kind === 'mail') await this.#markSent([message.id]);
-      return kind === 'event';
+      await this.#handle(message);
+      return true;
     } catch (error) {
-      this.#log.warn({ err: error, topic: message.topic, attempts: message.attempts }, 'outbox message not sent');
+      if (message.attempts >= GIVE_UP_AFTER) {
+        this.#log.error({ err: error, ...about }, 'outbox message given up');
+        return true;
+      }
+      this.#log.warn({ err: error, ...about }, 'outbox message not sent');
       await this.#db.query(
         `UPDATE "outbox_message" SET "leased_until" = now() + make_interval(secs => $2) WHERE "id" = $1`,
         [message.id, backoffS(message.attempts)],

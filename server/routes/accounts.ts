@@ -22,7 +22,11 @@ export function mountAccounts(api: Api): void {
   api.open(contracts.giveSecondFactor, giveSecondFactor);
   api.signedIn(
     contracts.signOut,
-    done((ctx) => closeSession(ctx.req)),
+    done(async (ctx) => {
+      await closeSession(ctx.req);
+      // Those of the person's other sessions come back by themselves.
+      ctx.services.endConnections(ctx.actor.accountId);
+    }),
   );
   api.signedIn(
     contracts.signOutEverywhere,

@@ -1,6 +1,7 @@
 import * as contracts from '../../shared/contracts/handoffs.ts';
 import { completeHandoff } from '../commands/handoffs/complete-handoff.ts';
 import { createHandoff } from '../commands/handoffs/create-handoff.ts';
+import { dropHandoff } from '../commands/handoffs/drop-handoff.ts';
 import * as days from '../commands/handoffs/handoff-days.ts';
 import type { HandoffView } from '../../shared/contracts/handoffs.ts';
 import type { Api } from '../http/api.ts';
@@ -36,4 +37,8 @@ export function mountHandoffs(api: Api): void {
   api.signedIn(contracts.declineHandoffDay, thenShown(days.declineHandoffDay));
   api.signedIn(contracts.withdrawHandoffDay, thenShown(days.withdrawHandoffDay));
   api.signedIn(contracts.completeHandoff, thenShown(completeHandoff));
+  api.signedIn(contracts.dropHandoff, async (ctx, input) => {
+    await dropHandoff(ctx, input);
+    return {};
+  });
 }

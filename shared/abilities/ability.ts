@@ -165,7 +165,7 @@ function allowLead(allow: Can, commissionId: string): void {
   allow(['read', 'picture', 'withdraw', 'word'], 'FitReport', here);
   allow('read', 'Consent', here);
   allow(['read'], 'Handoff', every(HANDOFF_FIELDS), here);
-  allow('create', 'Handoff', here);
+  allow(['create', 'drop'], 'Handoff', here);
   allow(['read', 'post'], 'Thread', { ...here, audience: { $in: ['named', 'makers', 'everyone'] } });
 }
 

@@ -5,7 +5,7 @@ export type Action =
   | 'update'
   | 'invite'
   | 'remove'
-  | 'move' // a leg on
+  | 'move' // a leg or a handoff on
   | 'drop' // a leg
   | 'measure' // add readings
   | 'raise' // a fit report on a joint

@@ -205,7 +205,9 @@ export const inviteParty = defineRoute({
     z.object({
       kind: z.literal('guest'),
       email: emailAddress,
-      sees: z.array(z.enum(GUEST_SIGHTS)).min(1, 'Tick what the guest may see'),
+      sees: z
+        .array(z.enum(GUEST_SIGHTS))
+        .refine((sees) => sees.includes('standing'), 'Where the piece stands is seen by every guest'),
       seesUntil: isoDay,
     }),
   ]),

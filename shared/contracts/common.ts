@@ -3,7 +3,10 @@ import { z } from 'zod';
 export const uuid = z.uuid({ error: 'This is not an identifier' });
 
 /** A calendar day, ISO 8601 `YYYY-MM-DD`; agreed dates are days and not instants. */
-export const isoDay = z.iso.date({ error: 'Give a date as year-month-day' });
+export const isoDay = z.iso
+  .date({ error: 'Give a date as year-month-day' })
+  // Beyond these a year is a slip of the key, and a plan over thousands of years is none.
+  .refine((day) => day >= '1990-01-01' && day <= '2100-12-31', 'Give a day between 1990 and 2100');
 
 /** An instant in UTC, ISO 8601. */
 export const instant = z.iso.datetime();

@@ -163,3 +163,16 @@ export const completeHandoff = defineRoute({
   body: z.object({ revision, onDay: isoDay, words: optionalProse(1000) }),
   problems: actProblems,
 });
+
+export const dropHandoff = defineRoute({
+  method: 'POST',
+  path: '/commissions/:commissionId/handoffs/:handoffId/drop',
+  status: 204,
+  access: 'signed-in',
+  summary: 'Take a handoff that will not come about out of the plan, with the reason (lead)',
+  params: inHandoff,
+  query: nothing,
+  body: z.object({ revision, words: prose(1000) }),
+  response: nothing,
+  problems: actProblems,
+});

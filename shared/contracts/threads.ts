@@ -84,6 +84,9 @@ export const openThread = defineRoute({
   problems: ['not-found', 'not-permitted'],
 });
 
+/** Sequences are kept as 32-bit integers. */
+const LAST_SEQUENCE = 2_147_483_647;
+
 export const listMessages = defineRoute({
   method: 'GET',
   path: '/commissions/:commissionId/threads/:threadId/messages',
@@ -92,8 +95,8 @@ export const listMessages = defineRoute({
   summary: 'Messages by sequence: the newest, those before one, or those after one',
   params: inThread,
   query: z.object({
-    before: z.coerce.number().int().min(1).optional(),
-    after: z.coerce.number().int().min(0).optional(),
+    before: z.coerce.number().int().min(1).max(LAST_SEQUENCE).optional(),
+    after: z.coerce.number().int().min(0).max(LAST_SEQUENCE).optional(),
     limit: z.coerce.number().int().min(1).max(200).default(50),
   }),
   body: nothing,
@@ -134,7 +137,7 @@ export const markThreadRead = defineRoute({
   summary: 'Read up to a sequence; the mark only moves forward',
   params: inThread,
   query: nothing,
-  body: z.object({ readSequence: z.int().min(0) }),
+  body: z.object({ readSequence: z.int().min(0).max(LAST_SEQUENCE) }),
   response: nothing,
   problems: ['not-found'],
 });

@@ -232,7 +232,7 @@ describe('the list', () => {
     for (let made = 0; made < 12; made += 1)
       await kit.lead.client.call(contracts.createCommission, { body: brief(`Row ${made}`) });
     // The relay looks into the outbox by itself and would be counted with the request.
-    await app.relay.stop();
+    await app.stopRelays();
     const count = async (limit: number): Promise<number> => {
       const pool = poolOf(app.services.db);
       const original = pool.query.bind(pool);

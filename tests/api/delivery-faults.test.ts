@@ -85,7 +85,7 @@ beforeAll(async () => {
   kit = await makeCommissionKit(app);
   threadId = await makeThread(app, kit, 'makers');
   // Only the process that is killed may send events here.
-  await app.relay.stop();
+  await app.stopRelays();
   serverPort = await freePort();
   proxy = new TcpProxy(serverPort);
   proxyPort = await proxy.listen();

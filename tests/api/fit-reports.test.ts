@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { removeParty } from '../../shared/contracts/commissions.ts';
 import * as contracts from '../../shared/contracts/fit-reports.ts';
 import type { FitReportDetail } from '../../shared/contracts/fit-reports.ts';
 import * as joints from '../../shared/contracts/joints.ts';
@@ -18,6 +19,7 @@ interface Bench extends CommissionKit {
   params: { commissionId: string };
   jointId: string;
   legId: string;
+  hiltId: string;
 }
 
 let bench: Bench;
@@ -67,7 +69,7 @@ beforeEach(async () => {
     params: { ...params, legId: leg.id },
     body: { revision: leg.revision, state: 'under-way', onDay: '2026-01-05' },
   });
-  bench = { ...kit, params, jointId: joint.id, legId: leg.id };
+  bench = { ...kit, params, jointId: joint.id, legId: leg.id, hiltId: hilt.id };
 });
 
 const raise = (): Promise<FitReportDetail> =>
@@ -134,10 +136,13 @@ describe('a fit report', () => {
     expect(detail.report).toMatchObject({ state: 'raised', reopenedCount: 1 });
     detail = await agree(await answer(detail));
     await rework();
-    detail = await bench.lead.client.call(contracts.verifyRework, {
-      params,
-      body: { revision: detail.report.revision, passed: true, words: '' },
+    const passed = { params, body: { revision: detail.report.revision, passed: true, words: '' } };
+    expect((await bench.lead.client.refused(contracts.verifyRework, passed)).code).toBe('not-in-this-state');
+    await bench.lead.client.call(joints.addReadings, {
+      params: { ...bench.params, jointId: bench.jointId },
+      body: { side: 'shaft', resolutionUm: 10, reportId: detail.report.id, readings: [{ text: '27.92', unit: 'mm' }] },
     });
+    detail = await bench.lead.client.call(contracts.verifyRework, passed);
     expect(detail.report.state).toBe('closed');
     expect(detail.events.map((event) => event.act)).toEqual([
       'raise',
@@ -154,6 +159,54 @@ describe('a fit report', () => {
     ]);
     expect((await bench.lead.client.call(legs.listLegs, { params: bench.params }))[0]?.held).toBeNull();
     expect((await bench.lead.client.call(legs.moveLeg, finish)).state).toBe('finished');
+  });
+
+  it('can be ended by the lead during the rework, where the other side is gone, and frees its leg', async () => {
+    let detail = await agree(await answer(await raise()));
+    const params = { ...bench.params, reportId: detail.report.id };
+    detail = await bench.maker.client.call(contracts.startRework, {
+      params,
+      body: { revision: detail.report.revision },
+    });
+    await bench.lead.client.call(legs.updatePart, {
+      params: { ...bench.params, partId: bench.hiltId },
+      body: { revision: 1, holderPartyId: bench.lead.partyId },
+    });
+    await bench.lead.client.call(removeParty, { params: { ...bench.params, partyId: bench.maker.partyId } });
+    detail = await bench.lead.client.call(contracts.withdrawFitReport, {
+      params,
+      body: { revision: detail.report.revision, words: 'The maker has left' },
+    });
+    expect(detail.report.state).toBe('withdrawn');
+    expect((await bench.lead.client.call(legs.listLegs, { params: bench.params }))[0]?.held).toBeNull();
+  });
+
+  it('answers consent and another act at the same moment without one of them breaking', async () => {
+    const outcomes = new Set<number>();
+    let detail = await raise();
+    const params = { ...bench.params, reportId: detail.report.id };
+    for (let round = 0; round < 8; round += 1) {
+      detail = await agree(await answer(detail, { shows: true, whereItShows: 'At the rim' }));
+      const noteId = detail.notes.at(-1)?.id ?? '';
+      const both = await Promise.all([
+        bench.client.client.try(contracts.answerConsent, {
+          params: { ...bench.params, noteId },
+          body: { given: true, words: '' },
+        }),
+        bench.lead.client.try(contracts.askOtherLimits, {
+          params,
+          body: { revision: detail.report.revision, noteId, words: 'Smaller' },
+        }),
+      ]);
+      for (const one of both) outcomes.add(one.ok ? 200 : one.problem.status);
+      detail = await bench.lead.client.call(contracts.getFitReport, { params });
+      if (detail.report.state === 'agreed')
+        detail = await bench.lead.client.call(contracts.askOtherLimits, {
+          params,
+          body: { revision: detail.report.revision, noteId, words: 'Smaller' },
+        });
+    }
+    expect([...outcomes].filter((status) => status >= 500)).toEqual([]);
   });
 
   it('whose rework shows waits for the client, who is asked in their own words and sees neither price nor method', async () => {

@@ -1,9 +1,11 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { getCommission, removeParty } from '../../shared/contracts/commissions.ts';
 import * as contracts from '../../shared/contracts/handoffs.ts';
 import type { HandoffView } from '../../shared/contracts/handoffs.ts';
 import * as legs from '../../shared/contracts/parts-and-legs.ts';
-import { getStanding } from '../../shared/contracts/standing.ts';
+import { getStanding, listMoved } from '../../shared/contracts/standing.ts';
 import { addDays, isWorkingDay } from '../../shared/units/calendar-day.ts';
+import { ShopMember } from '../../server/entities/shop-member.ts';
 import { makeMember } from '../factories/shop.ts';
 import { signedInAs } from '../factories/account.ts';
 import { makeCommissionKit, type CommissionKit } from '../support/commission-kit.ts';
@@ -164,4 +166,87 @@ it('receiving moves the parts to the receiver, once', async () => {
       })
     ).code,
   ).toBe('not-in-this-state');
+});
+
+describe('a handoff that will not come about', () => {
+  it('is dropped by the lead with a reason, leaves every list and the client’s dates, and stays on record', async () => {
+    const offered = await offer('maker', inDays(5));
+    const agreed = await kit.lead.client.call(contracts.acceptHandoffDay, {
+      params: { ...path(), offerId: standing(offered)?.id ?? '' },
+      body: { revision: offered.revision },
+    });
+    const drop = { params: path(), body: { revision: agreed.revision, words: 'It is carried over by hand' } };
+    expect((await kit.maker.client.refused(contracts.dropHandoff, drop)).code).toBe('not-permitted');
+    await kit.lead.client.call(contracts.dropHandoff, drop);
+    expect(await kit.maker.client.call(contracts.listHandoffs, { params })).toEqual([]);
+    expect((await kit.maker.client.refused(contracts.getHandoff, { params: path() })).code).toBe('not-found');
+    const told = await kit.client.client.call(getStanding, { params });
+    expect(told.facts.handoffs).toEqual([]);
+    const history = await kit.maker.client.call(listMoved, { params });
+    expect(history.items[0]?.words).toContain('It is carried over by hand');
+  });
+
+  it('holds its sides in the commission until it is dropped', async () => {
+    const leave = { params: { ...params, partyId: kit.finisher.partyId } };
+    const coating = await kit.lead.client.call(contracts.createHandoff, {
+      params,
+      body: {
+        fromPartyId: kit.maker.partyId,
+        toPartyId: kit.finisher.partyId,
+        partIds: [partId],
+        fromLegId: null,
+        toLegId: null,
+        transitDays: 1,
+        carriage: '',
+      },
+    });
+    expect((await kit.lead.client.refused(removeParty, leave)).code).toBe('not-in-this-state');
+    await kit.lead.client.call(contracts.dropHandoff, {
+      params: { ...params, handoffId: coating.id },
+      body: { revision: coating.revision, words: 'No coating after all' },
+    });
+    await kit.lead.client.call(removeParty, leave);
+  });
+});
+
+it('the books of the other side give no say in its days', async () => {
+  await app.services.db.manager.insert(ShopMember, {
+    shopId: kit.lead.shopId ?? '',
+    accountId: kit.maker.person.id,
+    role: 'bookkeeper',
+  });
+  const offered = await offer('maker', inDays(5));
+  const refused = await kit.maker.client.refused(contracts.acceptHandoffDay, {
+    params: { ...path(), offerId: standing(offered)?.id ?? '' },
+    body: { revision: offered.revision },
+  });
+  expect(refused.code).toBe('not-in-this-state');
+});
+
+it('the piece is delivered once the client has every part of it', async () => {
+  const blade = await kit.lead.client.call(legs.createPart, {
+    params,
+    body: { name: 'Blade', kind: 'blade', holderPartyId: kit.maker.partyId },
+  });
+  const receive = async (partIds: string[]): Promise<string> => {
+    const made = await kit.maker.client.call(contracts.createHandoff, {
+      params,
+      body: {
+        fromPartyId: kit.maker.partyId,
+        toPartyId: kit.client.partyId,
+        partIds,
+        fromLegId: null,
+        toLegId: null,
+        transitDays: 1,
+        carriage: '',
+      },
+    });
+    await kit.client.client.call(contracts.completeHandoff, {
+      params: { ...params, handoffId: made.id },
+      body: { revision: made.revision, onDay: '2026-01-05', words: '' },
+    });
+    return (await kit.lead.client.call(getCommission, { params })).state;
+  };
+  expect(await receive([blade.id])).not.toBe('delivered');
+  expect(await receive([partId])).toBe('delivered');
 });

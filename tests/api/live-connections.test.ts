@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import { io, type Socket } from 'socket.io-client';
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import * as accounts from '../../shared/contracts/accounts.ts';
@@ -62,6 +63,38 @@ describe('live connections', () => {
     expect(await ended).toEqual(['io server disconnect', 'io server disconnect']);
     await expect(connected(openSocket(there))).rejects.toThrow('not-signed-in');
     expect(other.connected).toBe(true);
+  });
+
+  it('of a browser do not outlive its sign-out', async () => {
+    const client = await signedInAs(app, await makeAccount(app));
+    const ended = cut(await live(client));
+    await client.call(accounts.signOut);
+    expect(await ended).toBe('io server disconnect');
+    await expect(connected(openSocket(client))).rejects.toThrow('not-signed-in');
+  });
+
+  it('end nothing but themselves with an event that is none, or an acknowledgement that is no function', async () => {
+    const client = await signedInAs(app, await makeAccount(app));
+    const socket = await live(client);
+    const uncaught: unknown[] = [];
+    const note = (error: unknown): number => uncaught.push(error);
+    const before = process.listeners('unhandledRejection');
+    process.removeAllListeners('unhandledRejection');
+    process.on('unhandledRejection', note);
+    process.on('uncaughtExceptionMonitor', note);
+    try {
+      socket.emit('thread.enter', {}, 'no function');
+      socket.emit('thread.leave', { threadId: randomUUID() }, 7);
+      socket.emit('thread.typing');
+      expect(await socket.timeout(5000).emitWithAck('thread.leave', { threadId: randomUUID() })).toEqual({ ok: true });
+      await new Promise((resolve) => setTimeout(resolve, 100));
+      expect(uncaught).toEqual([]);
+      expect(socket.connected).toBe(true);
+    } finally {
+      process.removeAllListeners('unhandledRejection');
+      process.off('uncaughtExceptionMonitor', note);
+      for (const listener of before) process.on('unhandledRejection', listener);
+    }
   });
 
   it('are cut when the password changes; the browser that changed it may open one again', async () => {

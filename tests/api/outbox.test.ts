@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, expect, it } from 'vitest';
 import { inTransaction } from '../../server/db/unit-of-work.ts';
 import { OutboxMessage } from '../../server/entities/outbox-message.ts';
-import { OutboxRelay, type OutgoingMessage } from '../../server/outbox/relay.ts';
+import { OutboxRelay, type OutboxKind, type OutgoingMessage } from '../../server/outbox/relay.ts';
 import { makeCommissionKit, type CommissionKit } from '../support/commission-kit.ts';
 import { startTestApp, type TestApp } from '../support/test-app.ts';
 
@@ -11,7 +11,7 @@ let kit: CommissionKit;
 beforeAll(async () => {
   app = await startTestApp();
   kit = await makeCommissionKit(app);
-  await app.relay.stop();
+  await app.stopRelays();
 });
 afterAll(() => app.close());
 
@@ -34,12 +34,13 @@ const unsent = () =>
 function relayInto(
   sent: string[],
   work: (message: OutgoingMessage) => Promise<void> = () => Promise.resolve(),
+  kind: OutboxKind = 'event',
 ): OutboxRelay {
   const take = async (message: OutgoingMessage): Promise<void> => {
     await work(message);
     sent.push(message.id);
   };
-  return new OutboxRelay(app.services.db, app.services.log, { event: take, mail: take });
+  return new OutboxRelay(app.services.db, app.services.log, kind, take);
 }
 
 it('leaves nothing when the transaction is rolled back', async () => {
@@ -76,7 +77,7 @@ it('sends again what was claimed and not marked, as after a crash, and a letter 
     attempts: 1,
   });
   const sent: string[] = [];
-  const relay = relayInto(sent);
+  const relay = relayInto(sent, undefined, 'mail');
   relay.start();
   await expect.poll(unsent, { timeout: 10_000 }).toBe(0);
   await relay.stop();
@@ -99,4 +100,21 @@ it('tries a message that failed again, later', async () => {
   await relay.stop();
   expect(failures).toBe(2);
   expect(sent).toHaveLength(1);
+});
+
+it('brings events while a letter waits for a mail server that does not answer', async () => {
+  await app.services.db.manager.insert(OutboxMessage, { topic: 'mail:password-reset', payload: {} });
+  await announce(3);
+  let release = (): void => undefined;
+  const silent = new Promise<void>((resolve) => (release = resolve));
+  const [letters, events] = [[] as string[], [] as string[]];
+  const mail = relayInto(letters, () => silent, 'mail');
+  const event = relayInto(events);
+  mail.start();
+  event.start();
+  await expect.poll(() => events.length, { timeout: 10_000 }).toBe(3);
+  expect(letters).toEqual([]);
+  release();
+  await Promise.all([mail.stop(), event.stop()]);
+  expect(letters).toHaveLength(1);
 });

@@ -1,3 +1,4 @@
+import { request } from 'node:http';
 import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
 import { ALL_ROUTES } from '../../shared/contracts/all-routes.ts';
 import { API_BASE } from '../../shared/contracts/route.ts';
@@ -5,6 +6,7 @@ import { EnvInvalid, readEnv } from '../../server/config/env.ts';
 import { createDataSource } from '../../server/db/data-source.ts';
 import { runMigrations } from '../../server/db/migrate.ts';
 import { ALL_MIGRATIONS } from '../../server/db/migrations/all-migrations.ts';
+import { makeAccount, signedInAs } from '../factories/account.ts';
 import { startTestApp, type TestApp } from '../support/test-app.ts';
 import { createTestDatabase, dropTestDatabase } from '../support/test-database.ts';
 
@@ -142,3 +144,25 @@ it('sends a strict policy with every page, without inline scripts or styles', as
   expect(policy).toContain("frame-ancestors 'none'");
   expect(policy).not.toContain('unsafe');
 });
+
+it('stops within its patience though a request under way never ends', async () => {
+  const other = await startTestApp();
+  const client = await signedInAs(other, await makeAccount(other));
+  const endless = request({
+    host: '127.0.0.1',
+    port: other.port,
+    path: '/api/v1/me',
+    method: 'PATCH',
+    headers: {
+      origin: other.origin,
+      cookie: client.cookie,
+      'content-type': 'application/json',
+      'content-length': '50',
+    },
+  });
+  const cut = new Promise((resolve) => endless.once('error', resolve));
+  endless.write('{');
+  await new Promise((resolve) => setTimeout(resolve, 300));
+  await other.close();
+  expect(await cut).toBeInstanceOf(Error);
+}, 20_000);

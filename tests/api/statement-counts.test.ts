@@ -18,7 +18,7 @@ import { startTestApp, type TestApp } from '../support/test-app.ts';
 let app: TestApp;
 beforeAll(async () => {
   app = await startTestApp();
-  await app.relay.stop();
+  await app.stopRelays();
 });
 afterAll(() => app.close());
 
@@ -80,7 +80,7 @@ async function fill(rows: number): Promise<Filled> {
   );
   await db.query(
     `INSERT INTO "handoff_offer" ("id", "handoff_id", "by_party_id", "by_account_id", "on_day")
-     SELECT gen_random_uuid(), "id", $2, $3, '2999-01-04' FROM "handoff" WHERE "commission_id" = $1`,
+     SELECT gen_random_uuid(), "id", $2, $3, '2099-01-04' FROM "handoff" WHERE "commission_id" = $1`,
     [commissionId, maker, person],
   );
   await many(

@@ -109,6 +109,7 @@ export const BODIES: Readonly<Record<string, (target: Target) => unknown>> = {
   acceptHandoffDay: () => ({ revision: STALE }),
   declineHandoffDay: () => ({ revision: STALE, reason: 'No' }),
   withdrawHandoffDay: () => ({ revision: STALE }),
+  dropHandoff: () => ({ revision: STALE, words: 'Not needed' }),
   completeHandoff: () => ({ revision: STALE, onDay: '2026-01-01', words: '' }),
   openThread: (target) => ({
     subject: 'commission',

@@ -124,6 +124,7 @@ export const OUTCOMES: Readonly<Record<string, OutcomeRows>> = {
   acceptHandoffDay: HANDOFF_SIDES,
   declineHandoffDay: HANDOFF_SIDES,
   withdrawHandoffDay: HANDOFF_SIDES,
+  dropHandoff: record('-YY0NNN000000', '-YY0NNN000000'),
   completeHandoff: record('-YY0NNN000000', '-YY0NNN000000'),
 
   listThreads: ALL_HERE,

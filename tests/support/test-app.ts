@@ -13,6 +13,8 @@ export interface TestApp extends RunningProcess {
   readonly mailDir: string;
   /** What `services.clock` answers; tests move it. */
   setNow(now: Date): void;
+  /** From then on the outbox is left to the test. */
+  stopRelays(): Promise<void>;
   close(): Promise<void>;
 }
 
@@ -46,6 +48,9 @@ export async function startTestApp(overrides: Record<string, string> = {}): Prom
     databaseUrl,
     mailDir,
     setNow: (moment) => void (now = moment),
+    async stopRelays() {
+      await Promise.all(running.relays.map((relay) => relay.stop()));
+    },
     async close() {
       await running.stop();
       await dropTestDatabase(inject('adminUrl'), databaseUrl);

@@ -1,3 +1,4 @@
+import { Like } from 'typeorm';
 import type { updateCommission as contract } from '../../../shared/contracts/commissions.ts';
 import type { ParsedInput } from '../../../shared/contracts/route.ts';
 import { inTransaction } from '../../db/unit-of-work.ts';
@@ -26,6 +27,7 @@ export const updateCommission = (
         id: changes.coverFileId,
         commissionId: row.id,
         place: 'commission',
+        mediaType: Like('image/%'),
       });
       if (ours === 0)
         throw new InputInvalid([{ pointer: '/body/coverFileId', message: 'Choose a picture of this commission' }]);

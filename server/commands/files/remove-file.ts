@@ -5,6 +5,7 @@ import { inTransaction } from '../../db/unit-of-work.ts';
 import { Commission } from '../../entities/commission.ts';
 import { FitReport } from '../../entities/fit-report.ts';
 import { Message } from '../../entities/message.ts';
+import { ReworkNote } from '../../entities/rework-note.ts';
 import { StoredFile } from '../../entities/stored-file.ts';
 import { NotFound, NotInThisState, NotPermitted } from '../../errors.ts';
 import type { RequestContext } from '../../http/context.ts';
@@ -25,7 +26,7 @@ export async function removeFile(ctx: RequestContext, { params }: ParsedInput<ty
       (await uow.manager.existsBy(Message, { threadId: file.placeId, fileIds: ArrayContains([fileId]) }));
     if (carried) throw new NotInThisState('A message carries this file. What was sent stays as it was sent.');
     const report = file.place === 'report' ? await uow.manager.findOneBy(FitReport, { id: file.placeId }) : null;
-    if (report && report.state !== 'raised')
+    if (report && (report.state !== 'raised' || (await uow.manager.existsBy(ReworkNote, { reportId: report.id }))))
       throw new NotInThisState('The report has been answered on the strength of its pictures. They stay.');
     await uow.manager.update(Commission, { id: commissionId, coverFileId: fileId }, { coverFileId: null });
     await uow.manager.delete(StoredFile, { id: fileId });

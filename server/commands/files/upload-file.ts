@@ -7,8 +7,9 @@ import { pointersOf } from '../../../shared/problems/pointers.ts';
 import { inTransaction } from '../../db/unit-of-work.ts';
 import { FitReport } from '../../entities/fit-report.ts';
 import { StoredFile } from '../../entities/stored-file.ts';
-import { AppError, InputInvalid, NotFound } from '../../errors.ts';
+import { AppError, InputInvalid, isConstraint, NotFound } from '../../errors.ts';
 import type { RequestContext } from '../../http/context.ts';
+import { unstorableIn } from '../../http/unstorable.ts';
 import { createUploadReceiver, type ReceivedFile } from '../../http/multipart.ts';
 import { detectMediaType } from '../../integrations/images/detect-media-type.ts';
 import { FileRefusedError } from '../../integrations/images/file-refused-error.ts';
@@ -90,6 +91,8 @@ async function keep(
   fields: Readonly<Record<string, unknown>>,
   file: ReceivedFile,
 ): Promise<StoredFileView> {
+  const unstorable = unstorableIn('body', fields);
+  if (unstorable.length > 0) throw new InputInvalid(unstorable);
   const parsed = contract.body.safeParse(fields);
   if (!parsed.success) throw new InputInvalid(pointersOf('body', parsed.error.issues));
   const { id, place, placeId, purpose, caption } = parsed.data;
@@ -128,7 +131,8 @@ async function keep(
     });
   } catch (error) {
     await Promise.all(keysOfStored(stored).map((key) => storage.remove(key)));
-    throw error;
+    // The same upload twice at the same moment: the one that came first is what is stored.
+    if (!isConstraint(error, 'PK_e140967af84027b493a3ff04fbb')) throw error;
   }
   const row = await loadFile(ctx.manager, commissionId, id);
   if (!row) throw new NotFound();

@@ -19,17 +19,18 @@ export const answerConsent = (
   inTransaction(ctx, async (uow) => {
     const { commissionId, noteId } = params;
     authorize(ctx.ability, 'consent', 'Consent', { commissionId });
-    const note = await uow.manager.findOne(ReworkNote, {
-      where: { id: noteId, consentState: In(['asked', 'given', 'refused']) },
-      lock: { mode: 'pessimistic_write' },
-    });
+    // The report first, as every step of a report does: two orders of locks would wait for each other.
+    const about = await uow.manager.findOneBy(ReworkNote, { id: noteId });
     const report =
-      note &&
+      about &&
       (await uow.manager.findOne(FitReport, {
-        where: { id: note.reportId, commissionId },
+        where: { id: about.reportId, commissionId },
         lock: { mode: 'pessimistic_write' },
       }));
-    if (!note || !report) throw new NotFound();
+    const note =
+      report &&
+      (await uow.manager.findOneBy(ReworkNote, { id: noteId, consentState: In(['asked', 'given', 'refused']) }));
+    if (!note) throw new NotFound();
     if (note.consentState !== 'asked')
       throw new NotInThisState(`This was answered already: consent ${note.consentState}. Nothing was changed.`);
     await uow.manager.update(

@@ -1,7 +1,11 @@
+import { MoreThan } from 'typeorm';
 import type * as contracts from '../../../shared/contracts/fit-reports.ts';
 import type { FitReportDetail } from '../../../shared/contracts/fit-reports.ts';
 import type { AnyRoute, ParsedInput } from '../../../shared/contracts/route.ts';
 import type { UnitOfWork } from '../../db/unit-of-work.ts';
+import type { FitReport } from '../../entities/fit-report.ts';
+import { Reading } from '../../entities/reading.ts';
+import { ReportEvent } from '../../entities/report-event.ts';
 import { ReworkNote } from '../../entities/rework-note.ts';
 import { NotInThisState } from '../../errors.ts';
 import type { RequestContext } from '../../http/context.ts';
@@ -83,17 +87,28 @@ export const verifyRework = (ctx: RequestContext, { params, body }: Input<'verif
       act: body.passed ? 'verify-pass' : 'verify-fail',
       words: body.words,
     },
-    (uow, report) => {
-      if (!body.passed) report.reopenedCount += 1;
+    async (uow, report) => {
+      if (body.passed) await requireFreshReadings(uow, report);
+      else report.reopenedCount += 1;
       const { commissionId, jointId } = report;
       uow.announce(
         'joint.changed',
         { commissionId, jointId },
         { to: 'parties', commissionId, partyIds: [report.raisedByPartyId, report.answerPartyId] },
       );
-      return Promise.resolve();
     },
   );
+
+/** A rework is verified by readings taken after it was done, and not by a word. */
+async function requireFreshReadings(uow: UnitOfWork, report: FitReport): Promise<void> {
+  const done = await uow.manager.findOneOrFail(ReportEvent, {
+    where: { reportId: report.id, act: 'finish-rework' },
+    order: { at: 'DESC' },
+  });
+  const fresh = await uow.manager.countBy(Reading, { jointId: report.jointId, takenAt: MoreThan(done.at) });
+  if (fresh === 0)
+    throw new NotInThisState('Measure the parts afresh first: a rework is verified by readings taken after it.');
+}
 
 export const withdrawFitReport = (
   ctx: RequestContext,

@@ -1,8 +1,8 @@
-import { In } from 'typeorm';
+import { In, Not } from 'typeorm';
 import type { completeHandoff as contract } from '../../../shared/contracts/handoffs.ts';
 import type { ParsedInput } from '../../../shared/contracts/route.ts';
 import { weekdayDayMonth } from '../../../shared/units/calendar-day.ts';
-import { inTransaction } from '../../db/unit-of-work.ts';
+import { inTransaction, type UnitOfWork } from '../../db/unit-of-work.ts';
 import { Commission } from '../../entities/commission.ts';
 import { HandoffOffer } from '../../entities/handoff-offer.ts';
 import { Part } from '../../entities/part.ts';
@@ -19,7 +19,11 @@ export const completeHandoff = (ctx: RequestContext, { params, body }: ParsedInp
   inTransaction(ctx, async (uow) => {
     const { commissionId, handoffId } = params;
     // Custody changes one at a time with parties leaving, so that no part is left with one who is gone.
-    await uow.manager.findOne(Commission, { where: { id: commissionId }, lock: { mode: 'pessimistic_write' } });
+    const commission = await uow.manager.findOne(Commission, {
+      where: { id: commissionId },
+      lock: { mode: 'pessimistic_write' },
+    });
+    if (!commission) throw new NotFound();
     const handoff = await lockHandoff(uow.manager, commissionId, handoffId);
     authorize(ctx.ability, 'receive', 'Handoff', handoff);
     const receiver = await uow.manager.findOneByOrFail(Party, { id: handoff.toPartyId });
@@ -50,12 +54,7 @@ export const completeHandoff = (ctx: RequestContext, { params, body }: ParsedInp
     handoff.doneOn = body.onDay;
     handoff.revision += 1;
     await uow.manager.save(handoff);
-    if (receiver.roles.includes('client'))
-      await uow.manager.update(
-        Commission,
-        { id: commissionId },
-        { deliveredOn: body.onDay, state: 'delivered', updatedAt: ctx.now },
-      );
+    if (receiver.roles.includes('client')) await deliver(uow, commission, handoff.toPartyId, body.onDay);
     const name = (await partyNames(uow.manager, commissionId)).get(handoff.toPartyId) ?? '';
     announceHandoff(
       uow,
@@ -67,3 +66,12 @@ export const completeHandoff = (ctx: RequestContext, { params, body }: ParsedInp
     uow.announce('parts.changed', { commissionId }, { to: 'everyone', commissionId });
     return handoffId;
   });
+
+/** The piece is delivered when the client has every part of it; one that was ended by then stays so. */
+async function deliver(uow: UnitOfWork, commission: Commission, clientPartyId: string, onDay: string): Promise<void> {
+  const elsewhere = await uow.manager.countBy(Part, { commissionId: commission.id, holderPartyId: Not(clientPartyId) });
+  if (elsewhere > 0 || commission.state === 'ended') return;
+  Object.assign(commission, { deliveredOn: onDay, state: 'delivered', revision: commission.revision + 1 });
+  await uow.manager.save(commission);
+  uow.announce('commission.changed', { commissionId: commission.id }, { to: 'everyone', commissionId: commission.id });
+}

@@ -1,4 +1,4 @@
-import type { EntityManager } from 'typeorm';
+import { IsNull, type EntityManager } from 'typeorm';
 import type * as contracts from '../../../shared/contracts/handoffs.ts';
 import type { AnyRoute, ParsedInput } from '../../../shared/contracts/route.ts';
 import { checkOfferAct, type OfferAct } from '../../../shared/engines/handoffs/offer-rules.ts';
@@ -45,7 +45,9 @@ const handoffAct = (
     authorize(ctx.ability, 'offer', 'Handoff', handoff);
     await guardHandoff(ctx, uow.manager, handoff, input.revision);
     const standing = await uow.manager.findOneBy(HandoffOffer, { handoffId, state: 'standing' });
-    const mine = ctx.actor.memberships.filter((one) => one.commissionId === commissionId).map((one) => one.partyId);
+    const mine = ctx.actor.memberships
+      .filter((one) => one.commissionId === commissionId && one.shopRole !== 'bookkeeper')
+      .map((one) => one.partyId);
     if (input.offerId && standing?.id !== input.offerId)
       throw new NotInThisState('That offer does not stand any more. Look at what stands now.');
     const answer = checkOfferAct({ ...handoff, standing }, act, mine, onDay);
@@ -66,7 +68,10 @@ const handoffAct = (
   });
 
 const lockHandoff = (manager: EntityManager, commissionId: string, handoffId: string): Promise<Handoff | null> =>
-  manager.findOne(Handoff, { where: { id: handoffId, commissionId }, lock: { mode: 'pessimistic_write' } });
+  manager.findOne(Handoff, {
+    where: { id: handoffId, commissionId, droppedAt: IsNull() },
+    lock: { mode: 'pessimistic_write' },
+  });
 
 async function guardHandoff(
   ctx: RequestContext,

@@ -2,7 +2,7 @@ import type { EntityManager } from 'typeorm';
 import { limitsFor } from '../../../shared/engines/fit/limits.ts';
 import type { ProblemError } from '../../../shared/problems/problems.ts';
 import { InputInvalid } from '../../errors.ts';
-import { requireParties } from '../../queries/parties/load-party.ts';
+import { requireShops } from '../../queries/parties/load-party.ts';
 import { requireParts } from '../../queries/parts/load-part.ts';
 
 interface JointFacts {
@@ -46,7 +46,7 @@ export async function checkJoint(manager: EntityManager, commissionId: string, j
     ['/body/holePartId', joint.holePartId],
     ['/body/shaftPartId', joint.shaftPartId],
   ]);
-  await requireParties(manager, commissionId, [
+  await requireShops(manager, commissionId, [
     ['/body/holePartyId', joint.holePartyId],
     ['/body/shaftPartyId', joint.shaftPartyId],
   ]);

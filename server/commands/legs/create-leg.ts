@@ -7,7 +7,7 @@ import { NotFound } from '../../errors.ts';
 import type { RequestContext } from '../../http/context.ts';
 import { authorizeCreate } from '../../policies/authorize.ts';
 import { loadAllLegs, loadLeg, type LegRecord } from '../../queries/legs/load-legs.ts';
-import { requireParties } from '../../queries/parties/load-party.ts';
+import { requireShops } from '../../queries/parties/load-party.ts';
 import { requireParts } from '../../queries/parts/load-part.ts';
 import { announceLegs } from './announce-legs.ts';
 import { setLegOrder } from './leg-order.ts';
@@ -18,7 +18,7 @@ export const createLeg = (ctx: RequestContext, { params, body }: ParsedInput<typ
     authorizeCreate(ctx.ability, 'Leg', { commissionId, partyId: body.partyId });
     // One plan at a time: two saves that each look sound could make a loop together.
     await uow.manager.findOneOrFail(Commission, { where: { id: commissionId }, lock: { mode: 'pessimistic_write' } });
-    await requireParties(uow.manager, commissionId, [['/body/partyId', body.partyId]]);
+    await requireShops(uow.manager, commissionId, [['/body/partyId', body.partyId]]);
     await requireParts(uow.manager, commissionId, [['/body/partId', body.partId]]);
     const { afterLegIds, ...fields } = body;
     const legs = await loadAllLegs(uow.manager, commissionId);

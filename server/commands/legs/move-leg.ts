@@ -1,5 +1,6 @@
 import { checkLegMove } from '../../../shared/engines/legs/leg-states.ts';
 import type { moveLeg as contract } from '../../../shared/contracts/parts-and-legs.ts';
+import { addDays } from '../../../shared/units/calendar-day.ts';
 import type { ParsedInput } from '../../../shared/contracts/route.ts';
 import { inTransaction } from '../../db/unit-of-work.ts';
 import { Commission } from '../../entities/commission.ts';
@@ -36,6 +37,8 @@ export const moveLeg = (ctx: RequestContext, { params, body }: ParsedInput<typeo
       { to: body.state, early: body.early },
     );
     if (!move.ok) throw new NotInThisState(move.words);
+    if (body.onDay > addDays(ctx.todayIso, 1))
+      throw new InputInvalid([{ pointer: '/body/onDay', message: 'That day is still to come; say what has happened' }]);
     if (body.state === 'finished' && leg.startedOn && body.onDay < leg.startedOn)
       throw new InputInvalid([{ pointer: '/body/onDay', message: 'A leg cannot be finished before it was started' }]);
     await uow.manager.update(

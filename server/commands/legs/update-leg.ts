@@ -9,7 +9,7 @@ import { authorize } from '../../policies/authorize.ts';
 import { presentLeg } from '../../presenters/leg.ts';
 import { fieldsFor } from '../../presenters/pick-fields.ts';
 import { loadAllLegs, loadLeg, type LegRecord } from '../../queries/legs/load-legs.ts';
-import { requireParties } from '../../queries/parties/load-party.ts';
+import { requireShops } from '../../queries/parties/load-party.ts';
 import { requireParts } from '../../queries/parts/load-part.ts';
 import { given, guardRevision } from '../revision.ts';
 import { announceLegs } from './announce-legs.ts';
@@ -37,9 +37,11 @@ export const updateLeg = (ctx: RequestContext, { params, body }: ParsedInput<typ
       throw new InputInvalid([
         { pointer: '/body/likelyDays', message: 'Hopeful cannot be longer than likely, nor likely longer than bad' },
       ]);
-    if (changes.partyId) await requireParties(uow.manager, commissionId, [['/body/partyId', changes.partyId]]);
+    if (changes.partyId) await requireShops(uow.manager, commissionId, [['/body/partyId', changes.partyId]]);
     if (changes.partId) await requireParts(uow.manager, commissionId, [['/body/partId', changes.partId]]);
-    await uow.manager.update(Leg, { id: legId }, { ...changes, revision: leg.revision + 1 });
+    // A shop's own note does not go over to another shop with the leg.
+    const ownNote = changes.partyId && changes.partyId !== leg.partyId ? { privateNote: '' } : {};
+    await uow.manager.update(Leg, { id: legId }, { ...changes, ...ownNote, revision: leg.revision + 1 });
     if (afterLegIds)
       await setLegOrder(uow.manager, legs, { id: legId, title: changes.title ?? leg.title }, afterLegIds);
     // A private note is the shop's own: it moves nothing and nobody else hears of it.

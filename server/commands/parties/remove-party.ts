@@ -3,6 +3,7 @@ import type { removeParty as contract } from '../../../shared/contracts/commissi
 import type { ParsedInput } from '../../../shared/contracts/route.ts';
 import { inTransaction } from '../../db/unit-of-work.ts';
 import { Commission } from '../../entities/commission.ts';
+import { Handoff } from '../../entities/handoff.ts';
 import { Leg } from '../../entities/leg.ts';
 import { Part } from '../../entities/part.ts';
 import { Party } from '../../entities/party.ts';
@@ -12,7 +13,7 @@ import { authorize } from '../../policies/authorize.ts';
 import { partyNames } from '../../queries/parties/load-party.ts';
 import { refreshCommissionNames } from '../commissions/refresh-members.ts';
 
-/** Takes a party out. It must hold no part and have no leg to do, since work and custody always belong to someone. */
+/** Takes a party out. It must hold no part, have no leg to do and be in no handoff to come: those always belong to someone. */
 export const removeParty = (ctx: RequestContext, { params }: ParsedInput<typeof contract>): Promise<void> =>
   inTransaction(ctx, async (uow) => {
     const { commissionId, partyId } = params;
@@ -35,6 +36,15 @@ export const removeParty = (ctx: RequestContext, { params }: ParsedInput<typeof 
     if (legs.length > 0)
       throw new NotInThisState(
         `${name} has ${legs.map((leg) => leg.title).join(', ')} to do. Give it to another shop or drop it first; nothing was changed.`,
+      );
+    const open = { commissionId, doneOn: IsNull(), droppedAt: IsNull() };
+    const handoffs = await uow.manager.countBy(Handoff, [
+      { ...open, fromPartyId: partyId },
+      { ...open, toPartyId: partyId },
+    ]);
+    if (handoffs > 0)
+      throw new NotInThisState(
+        `${name} is one side of ${handoffs === 1 ? 'a planned handoff' : `${handoffs} planned handoffs`}. Drop what will not come about first; nothing was changed.`,
       );
     await uow.manager.update(Party, { id: partyId }, { leftAt: ctx.now });
     await refreshCommissionNames(uow.manager, commissionId);

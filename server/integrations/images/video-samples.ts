@@ -58,6 +58,8 @@ async function samplesPerChunk(file: BoxFile, stsc: Box, chunks: number): Promis
   const perChunk = new Array<number>(chunks).fill(0);
   for (let row = 0; row < count; row += 1) {
     const first = rows.readUInt32BE(row * 12) - 1;
+    // The rows ascend (ISO/IEC 14496-12, 8.7.4); ones that do not would have every chunk walked for every row.
+    if (row > 0 && first <= rows.readUInt32BE((row - 1) * 12) - 1) throw videoUnreadable();
     const next = row + 1 < count ? rows.readUInt32BE((row + 1) * 12) - 1 : chunks;
     for (let chunk = Math.max(0, first); chunk < Math.min(next, chunks); chunk += 1)
       perChunk[chunk] = rows.readUInt32BE(row * 12 + 4);

@@ -96,7 +96,7 @@ export async function loadBenchFacts(
          NOT EXISTS (SELECT 1 FROM "part" p WHERE p."id" = ANY(h."part_ids") AND p."holder_party_id" <> h."from_party_id") AS "holderReady",
          o."id" AS "offerId", o."by_party_id" AS "offerByPartyId", o."on_day"::text AS "offerOn"
        FROM "handoff" h LEFT JOIN "handoff_offer" o ON o."handoff_id" = h."id" AND o."state" = 'standing'
-       WHERE h."commission_id" = ANY($1) AND h."done_on" IS NULL ORDER BY h."agreed_on" NULLS LAST`,
+       WHERE h."commission_id" = ANY($1) AND h."done_on" IS NULL AND h."dropped_at" IS NULL ORDER BY h."agreed_on" NULLS LAST`,
     ),
     ask<BenchFacts['mentions'][number]>(
       `SELECT t."id" AS "threadId", t."commission_id" AS "commissionId", t."title", count(*)::int AS count

@@ -47,7 +47,7 @@ export function listStatement(
     );
   }
   if (query.cursor) {
-    const [instant, id] = decodeCursor(query.cursor, 2);
+    const [instant, id] = decodeCursor(query.cursor, ['instant', 'uuid']);
     where.push(`(c."updated_at", c."id") < (${bind(instant)}::timestamptz, ${bind(id)}::uuid)`);
   }
   const text = `

@@ -31,7 +31,7 @@ const handoffsSql = (where: string): string => `
         ORDER BY o."created_at" DESC, o."id")
       FROM "handoff_offer" o JOIN "account" b ON b."id" = o."by_account_id" LEFT JOIN "account" r ON r."id" = o."answered_by_account_id"
       WHERE o."handoff_id" = h."id"), '[]') AS "offers"
-  FROM "handoff" h WHERE h."commission_id" = $1 AND ${where}
+  FROM "handoff" h WHERE h."commission_id" = $1 AND h."dropped_at" IS NULL AND ${where}
   ORDER BY h."done_on" NULLS LAST, h."agreed_on" NULLS LAST, h."id"`;
 
 export function loadVisibleHandoffs(

@@ -2,7 +2,7 @@ import { In, IsNull, type EntityManager } from 'typeorm';
 import { Party } from '../../entities/party.ts';
 import { InputInvalid } from '../../errors.ts';
 
-/** Checks that named parties take part in the commission now; `pointer` names the field when one does not. */
+/** Checks that named parties take part in the commission now, and do not only look on; `pointer` names the field. */
 export async function requireParties(
   manager: EntityManager,
   commissionId: string,
@@ -11,11 +11,35 @@ export async function requireParties(
   const ids = [...new Set(wanted.map(([, partyId]) => partyId))];
   const rows = await manager.findBy(Party, { commissionId, id: In(ids), leftAt: IsNull() });
   const byId = new Map(rows.map((row) => [row.id, row]));
-  const errors = wanted
-    .filter(([, partyId]) => !byId.has(partyId))
-    .map(([pointer]) => ({ pointer, message: 'This party does not take part in the commission' }));
-  if (errors.length > 0) throw new InputInvalid(errors);
+  refuse(wanted, (partyId) =>
+    byId.has(partyId)
+      ? byId.get(partyId)?.roles.includes('guest')
+        ? 'A guest only looks on'
+        : null
+      : 'This party does not take part in the commission',
+  );
   return byId;
+}
+
+/** As `requireParties`, for what is a shop's work or answer. */
+export async function requireShops(
+  manager: EntityManager,
+  commissionId: string,
+  wanted: readonly [pointer: string, partyId: string][],
+): Promise<void> {
+  const parties = await requireParties(manager, commissionId, wanted);
+  refuse(wanted, (partyId) => (parties.get(partyId)?.shopId ? null : 'This is work of a shop'));
+}
+
+function refuse(
+  wanted: readonly [pointer: string, partyId: string][],
+  troubleWith: (partyId: string) => string | null,
+): void {
+  const errors = wanted.flatMap(([pointer, partyId]) => {
+    const message = troubleWith(partyId);
+    return message ? [{ pointer, message }] : [];
+  });
+  if (errors.length > 0) throw new InputInvalid(errors);
 }
 
 /** Names of parties as they are printed, those that left included. */

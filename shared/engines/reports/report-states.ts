@@ -33,7 +33,12 @@ export const REPORT_STEPS: Readonly<Record<ReportAct, Step>> = {
   'finish-rework': { from: ['being-reworked'], to: 'to-be-verified', by: 'answerer' },
   'verify-pass': { from: ['to-be-verified'], to: 'closed', by: 'raiser' },
   'verify-fail': { from: ['to-be-verified'], to: 'raised', by: 'raiser' },
-  withdraw: { from: ['raised', 'answered', 'agreed'], to: 'withdrawn', by: 'raiser-or-lead' },
+  // Also during the rework: where one side is gone, nobody else could end the report and free its leg.
+  withdraw: {
+    from: ['raised', 'answered', 'agreed', 'being-reworked', 'to-be-verified'],
+    to: 'withdrawn',
+    by: 'raiser-or-lead',
+  },
 };
 
 export const REPORT_STATE_WORDS: Readonly<Record<ReportState, string>> = {

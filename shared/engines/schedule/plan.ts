@@ -59,17 +59,22 @@ function networkOf(input: PlanInput, days: WorkingDays, durationOf: (leg: PlanLe
   const liveIds = new Set(live.map((leg) => leg.id));
   const byId = new Map(input.legs.map((leg) => [leg.id, leg]));
   // What waited for a dropped leg waits for what that one waited for: the part still comes from there.
-  const waitsFor = (leg: PlanLeg, seen: ReadonlySet<string> = new Set()): string[] =>
-    leg.afterLegIds.flatMap((id) => {
-      const before = byId.get(id);
-      if (!before || seen.has(id)) return [];
-      return liveIds.has(id) ? [id] : waitsFor(before, new Set([...seen, id]));
-    });
+  const waitsFor = (leg: PlanLeg): ReadonlySet<string> => {
+    const found = new Set<string>();
+    const passed = new Set<string>();
+    const ahead = [...leg.afterLegIds];
+    for (let id = ahead.pop(); id !== undefined; id = ahead.pop()) {
+      if (liveIds.has(id)) found.add(id);
+      else if (!passed.has(id)) ahead.push(...(byId.get(id)?.afterLegIds ?? []));
+      passed.add(id);
+    }
+    return found;
+  };
   const dayAfter = (day: IsoDay): number => days.numberOf(day) + 1;
 
   const legs = live.map((leg): Activity => {
     const arrivals = input.handoffs.filter((handoff) => handoff.toLegId === leg.id);
-    const lags = new Map(waitsFor(leg).map((id) => [id, 0]));
+    const lags = new Map([...waitsFor(leg)].map((id) => [id, 0]));
     for (const { fromLegId, transitDays, doneOn } of arrivals)
       if (fromLegId && liveIds.has(fromLegId) && !doneOn)
         lags.set(fromLegId, Math.max(lags.get(fromLegId) ?? 0, transitDays));

@@ -28,10 +28,12 @@ export function Sheet({ title, note, stamp, headingLevel = 2, id, className, chi
       )}
     >
       <header className="mb-3 flex flex-wrap items-start justify-between gap-x-4 gap-y-1.5">
-        <Heading id={headingId} className="text-head">
-          {title}
-          {note && <span className="ml-1.5 text-note font-medium text-lead-grey">{note}</span>}
-        </Heading>
+        <div className="flex flex-wrap items-baseline gap-x-2">
+          <Heading id={headingId} className="text-head">
+            {title}
+          </Heading>
+          {note && <p className="text-note font-medium text-lead-grey">{note}</p>}
+        </div>
         {stamp}
       </header>
       {children}

@@ -138,6 +138,20 @@ describe('a plan in days', () => {
     expect(daysBetween(free?.toDay ?? '', held?.toDay ?? '')).toBeGreaterThan(0);
   });
 
+  it('walks dropped legs once each, however many ways there are through them', () => {
+    const layers = Array.from({ length: 30 }, (_, layer) =>
+      ['x', 'y', 'z'].map((name) =>
+        leg(`${name}${layer}`, 1, {
+          state: 'dropped',
+          afterLegIds: layer === 0 ? ['a'] : ['x', 'y', 'z'].map((before) => `${before}${layer - 1}`),
+        }),
+      ),
+    ).flat();
+    const last = leg('end', 2, { afterLegIds: ['x29', 'y29', 'z29'] });
+    const straight = plan([leg('a', 3), leg('end', 2, { afterLegIds: ['a'] })]).legs.get('end');
+    expect(plan([leg('a', 3), ...layers, last]).legs.get('end')).toEqual(straight);
+  });
+
   it('what waited for a dropped leg waits for what that one waited for', () => {
     const dropped = leg('b', 4, { afterLegIds: ['a'], state: 'dropped' });
     const legs = [leg('a', 3), dropped, leg('c', 1, { afterLegIds: ['b'] })];

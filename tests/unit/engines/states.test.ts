@@ -19,7 +19,13 @@ const TABLE: Record<ReportAct, Partial<Record<ReportState, ReportState>>> = {
   'finish-rework': { 'being-reworked': 'to-be-verified' },
   'verify-pass': { 'to-be-verified': 'closed' },
   'verify-fail': { 'to-be-verified': 'raised' },
-  withdraw: { raised: 'withdrawn', answered: 'withdrawn', agreed: 'withdrawn' },
+  withdraw: {
+    raised: 'withdrawn',
+    answered: 'withdrawn',
+    agreed: 'withdrawn',
+    'being-reworked': 'withdrawn',
+    'to-be-verified': 'withdrawn',
+  },
 };
 const STATES: ReportState[] = [
   'raised',

@@ -21,6 +21,7 @@ import { keys } from '../../../lib/query-keys.ts';
 import { commissionQueries } from '../../../lib/queries/commissions.ts';
 import { handoffQueries } from '../../../lib/queries/handoffs.ts';
 import { shortInstant } from '../../../lib/today.ts';
+import { DropHandoff } from './drop-handoff.tsx';
 
 interface HandoffProps {
   commissionId: string;
@@ -284,6 +285,9 @@ export function HandoffSheet({
           <OfferDay {...shared} countering={false} />
         ))}
       {mayDo(ability, 'receive', 'Handoff', facts) && handoff.agreedOn && !handoff.doneOn && <Receive {...shared} />}
+      {mayDo(ability, 'drop', 'Handoff', facts) && !handoff.doneOn && (
+        <DropHandoff commissionId={commissionId} handoff={handoff} />
+      )}
       {handoff.offers && handoff.offers.length > 0 && (
         <Fold summary="All offers so far">
           <ol className="grid gap-1 text-note text-lead-grey">

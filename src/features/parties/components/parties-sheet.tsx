@@ -23,10 +23,10 @@ import { ROLE_WORDS } from '../../../lib/words.ts';
 type ShopWork = 'maker' | 'finisher' | 'installer';
 
 const SIGHT_WORDS: Readonly<Record<GuestSight, string>> = {
-  standing: 'Where it stands',
+  standing: 'Where it stands and who holds its parts',
   pictures: 'Pictures',
   threads: 'Threads open to everyone',
-  parts: 'Parts and who takes part',
+  parts: 'Who takes part, and the list of parts',
 };
 
 /** Invites a shop, the client or a guest by a letter with a link. */
@@ -85,6 +85,7 @@ function Invite({ commissionId, today }: { commissionId: string; today: string }
               <Checkbox
                 key={sight}
                 label={SIGHT_WORDS[sight]}
+                disabled={sight === 'standing'}
                 checked={values.sees.includes(sight)}
                 onChange={(event) => set('sees', toggle(values.sees, sight, event.target.checked))}
               />
