@@ -39,13 +39,21 @@ function Search() {
   useEffect(() => {
     if (field.current) field.current.value = asked;
   }, [asked]);
-  const find = (form: FormData): void => {
-    const search = form.get('search');
-    const query = typeof search === 'string' && search.trim() !== '' ? new URLSearchParams({ search }) : '';
-    void navigate({ pathname: '/commissions', search: query.toString() });
+  const find = (): void => {
+    const search = field.current?.value.trim() ?? '';
+    void navigate({
+      pathname: '/commissions',
+      search: search === '' ? '' : new URLSearchParams({ search }).toString(),
+    });
   };
   return (
-    <form action={find} role="search">
+    <form
+      role="search"
+      onSubmit={(event) => {
+        event.preventDefault();
+        find();
+      }}
+    >
       <input
         ref={field}
         type="search"

@@ -72,6 +72,7 @@ export function PasswordSheet({ email }: { email: string }) {
   const [next, setNext] = useState('');
   const [done, setDone] = useState(false);
   const change = useAct(changePassword, {
+    said: 'The password is changed.',
     onDone: () => {
       setCurrent('');
       setNext('');

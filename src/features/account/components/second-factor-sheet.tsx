@@ -88,7 +88,7 @@ function SetUp({ onConfirmed }: { onConfirmed: (codes: readonly string[]) => voi
 function TakeOff() {
   const [password, setPassword] = useState('');
   const [code, setCode] = useState('');
-  const remove = useAct(removeSecondFactor, { stale: () => [keys.me()] });
+  const remove = useAct(removeSecondFactor, { said: 'The second factor is off.', stale: () => [keys.me()] });
   return (
     <Fold summary="Take the second factor off">
       <form

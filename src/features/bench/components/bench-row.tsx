@@ -62,7 +62,10 @@ function addressOf(item: BenchItemView): string {
 
 /** Accepts the offered day in place. */
 function AcceptDay({ item }: { item: BenchItemView }) {
-  const accept = useAct(acceptHandoffDay, { stale: () => [keys.bench(), keys.commission(item.commissionId)] });
+  const accept = useAct(acceptHandoffDay, {
+    said: 'The day is agreed.',
+    stale: () => [keys.bench(), keys.commission(item.commissionId)],
+  });
   if (!item.offerId || item.refRevision === null || !item.day) return null;
   const { offerId, refRevision: revision, day } = item;
   return (
@@ -85,7 +88,10 @@ function AcceptDay({ item }: { item: BenchItemView }) {
 
 /** Starts or finishes a leg in place, as of today. */
 function MoveLeg({ item, today }: { item: BenchItemView; today: string }) {
-  const move = useAct(moveLeg, { stale: () => [keys.bench(), keys.commission(item.commissionId)] });
+  const move = useAct(moveLeg, {
+    said: 'The leg is updated.',
+    stale: () => [keys.bench(), keys.commission(item.commissionId)],
+  });
   if (item.refRevision === null) return null;
   const state = item.kind === 'start-leg' ? 'under-way' : 'finished';
   const revision = item.refRevision;

@@ -14,6 +14,7 @@ export function ConsentCard({ commissionId, consent }: { commissionId: string; c
   const [words, setWords, forget] = useDraft(`consent-${consent.noteId}`, '');
   const [refusing, setRefusing] = useState(false);
   const answer = useAct(answerConsent, {
+    said: 'Your answer is kept.',
     stale: () => [keys.consents.list(commissionId), keys.standing.detail(commissionId), keys.bench()],
     onDone: forget,
   });

@@ -51,6 +51,7 @@ export function WhoHasWhat({ commissionId, actsOf }: { commissionId: string; act
 export function LegActs({ commissionId, leg, today }: { commissionId: string; leg: LegView; today: string }) {
   const { ability } = useSight(commissionId);
   const move = useAct(moveLeg, {
+    said: 'The leg is updated.',
     stale: () => [keys.legs.list(commissionId), keys.standing.detail(commissionId), keys.bench()],
   });
   if (!mayDo(ability, 'move', 'Leg', { commissionId, partyId: leg.partyId })) return null;

@@ -28,6 +28,7 @@ export function RaiseForm({ commissionId, jointId, legs, onRaised }: RaiseFormPr
   const open = legs.filter((leg) => leg.state === 'under-way' || leg.state === 'planned');
   const [heldLegId, setHeldLegId] = useState(open.find((leg) => leg.state === 'under-way')?.id ?? open[0]?.id ?? '');
   const raise = useAct(raiseFitReport, {
+    said: 'The report is raised.',
     stale: () => [
       keys.fitReports.lists(commissionId),
       keys.joints.lists(commissionId),

@@ -78,7 +78,11 @@ export function ReportHead({
 export function ClientWords({ commissionId, detail }: { commissionId: string; detail: FitReportDetail }) {
   const { report } = detail;
   const [words, setWords, forget] = useDraft(`client-words-${report.id}`, report.clientWords);
-  const write = useAct(writeClientWords, { stale: () => staleAfterReport(commissionId, report.id), onDone: forget });
+  const write = useAct(writeClientWords, {
+    said: 'The words are saved.',
+    stale: () => staleAfterReport(commissionId, report.id),
+    onDone: forget,
+  });
   return (
     <Sheet
       title="What the client reads of this"

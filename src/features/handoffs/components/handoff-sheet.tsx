@@ -49,6 +49,7 @@ function OfferDay({ commissionId, handoff, today, countering }: HandoffProps & {
   const [onDay, setOnDay, forgetDay] = useDraft(`handoff-day-${handoff.id}`, '');
   const [words, setWords, forgetWords] = useDraft(`handoff-words-${handoff.id}`, '');
   const offer = useAct(contracts.offerHandoffDay, {
+    said: 'The day is offered.',
     stale: () => [keys.handoffs.lists(commissionId), keys.handoffs.detail(commissionId, handoff.id), keys.bench()],
     onDone: () => {
       forgetDay();
@@ -92,8 +93,9 @@ function AnswerOffer({ commissionId, handoff, today }: HandoffProps) {
     keys.standing.detail(commissionId),
     keys.bench(),
   ];
-  const accept = useAct(contracts.acceptHandoffDay, { stale });
+  const accept = useAct(contracts.acceptHandoffDay, { said: 'The day is agreed.', stale });
   const decline = useAct(contracts.declineHandoffDay, {
+    said: 'The day is declined.',
     stale,
     onDone: () => {
       forgetReason();
@@ -142,6 +144,7 @@ function AnswerOffer({ commissionId, handoff, today }: HandoffProps) {
 
 function OwnOffer({ commissionId, handoff, today }: HandoffProps) {
   const withdraw = useAct(contracts.withdrawHandoffDay, {
+    said: 'The offer is taken back.',
     stale: () => [keys.handoffs.lists(commissionId), keys.handoffs.detail(commissionId, handoff.id), keys.bench()],
   });
   const standing = standingOf(handoff);
@@ -173,7 +176,10 @@ function OwnOffer({ commissionId, handoff, today }: HandoffProps) {
 
 function Receive({ commissionId, handoff, today }: HandoffProps) {
   const [onDay, setOnDay] = useState(today);
-  const receive = useAct(contracts.completeHandoff, { stale: () => [keys.commission(commissionId), keys.bench()] });
+  const receive = useAct(contracts.completeHandoff, {
+    said: 'The parts are received.',
+    stale: () => [keys.commission(commissionId), keys.bench()],
+  });
   return (
     <form
       className="grid gap-3 border-t border-hairline pt-4"

@@ -111,7 +111,7 @@ function Invite({ commissionId, today }: { commissionId: string; today: string }
 }
 
 function RemoveParty({ commissionId, partyId, name }: { commissionId: string; partyId: string; name: string }) {
-  const remove = useAct(removeParty, { stale: () => [keys.parties.list(commissionId)] });
+  const remove = useAct(removeParty, { said: 'They are taken out.', stale: () => [keys.parties.list(commissionId)] });
   return (
     <AskFirst
       label="Take out"
@@ -130,7 +130,10 @@ function RemoveParty({ commissionId, partyId, name }: { commissionId: string; pa
 export function PartiesSheet({ commissionId, today }: { commissionId: string; today: string }) {
   const { data } = useSuspenseQuery(commissionQueries.parties(commissionId));
   const { ability } = useSight(commissionId);
-  const withdraw = useAct(withdrawInvitation, { stale: () => [keys.parties.list(commissionId)] });
+  const withdraw = useAct(withdrawInvitation, {
+    said: 'The invitation is taken back.',
+    stale: () => [keys.parties.list(commissionId)],
+  });
   const facts = { id: commissionId, memberKeys: [] };
   const mayRemove = mayDo(ability, 'remove', 'Commission', facts);
   return (

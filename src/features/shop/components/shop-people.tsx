@@ -22,7 +22,10 @@ import { SHOP_ROLE_WORDS } from '../../../lib/words.ts';
 /** A choice of role that counts once it is saved: going through a list by keyboard must not change anyone's rights. */
 function MemberRole({ shopId, member }: { shopId: string; member: ShopMemberView }) {
   const [role, setRole] = useState<ShopRole>(member.role);
-  const change = useAct(changeShopMember, { stale: () => [keys.shops.members(shopId), keys.me()] });
+  const change = useAct(changeShopMember, {
+    said: 'The role is changed.',
+    stale: () => [keys.shops.members(shopId), keys.me()],
+  });
   return (
     <form
       className="grid gap-2"
@@ -57,6 +60,7 @@ function MemberRole({ shopId, member }: { shopId: string; member: ShopMemberView
 function LeaveShop({ shopId, shopName, accountId }: { shopId: string; shopName: string; accountId: string }) {
   const navigate = useNavigate();
   const leave = useAct(removeShopMember, {
+    said: 'You have left the shop.',
     stale: () => [keys.me(), keys.bench(), keys.commissions.lists()],
     onDone: () => void navigate('/', { replace: true }),
   });
@@ -75,7 +79,7 @@ function LeaveShop({ shopId, shopName, accountId }: { shopId: string; shopName: 
 }
 
 function TakeOut({ shopId, member }: { shopId: string; member: ShopMemberView }) {
-  const remove = useAct(removeShopMember, { stale: () => [keys.shops.members(shopId)] });
+  const remove = useAct(removeShopMember, { said: 'They are taken out.', stale: () => [keys.shops.members(shopId)] });
   return (
     <AskFirst
       label="Take out"
@@ -94,7 +98,10 @@ function TakeOut({ shopId, member }: { shopId: string; member: ShopMemberView })
 export function ShopPeople({ shopId, shopName, isOwner }: { shopId: string; shopName: string; isOwner: boolean }) {
   const { data } = useSuspenseQuery(shopQueries.members(shopId));
   const { data: me } = useSuspenseQuery(meQuery());
-  const withdraw = useAct(withdrawShopInvitation, { stale: () => [keys.shops.members(shopId)] });
+  const withdraw = useAct(withdrawShopInvitation, {
+    said: 'The invitation is taken back.',
+    stale: () => [keys.shops.members(shopId)],
+  });
   return (
     <Sheet title="People">
       <ul>

@@ -44,6 +44,7 @@ export function OpenThread({
   const [audience, setAudience] = useState<Audience>(isClient ? 'everyone' : 'named');
   const [named, setNamed] = useState<readonly string[]>(suggestedPartyIds);
   const open = useAct(openThread, {
+    said: 'The thread is open.',
     stale: () => [keys.threads.lists(commissionId)],
     onDone: (thread) => onOpened?.(thread.id),
   });
