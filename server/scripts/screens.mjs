@@ -22,6 +22,8 @@ const ALL_BYTES = 2.5 * 1024 * 1024;
 /** Palettes tried from the finest on, until a picture is light enough. */
 const PALETTES = [256, 128, 64, 32, 16];
 
+const ROOMS = new Set(['report', 'joint', 'handoff']);
+
 const SIZES = /** @type {const} */ ([
   { width: 1440, height: 1000 },
   { width: 360, height: 780 },
@@ -103,6 +105,8 @@ async function draw(page, path, name) {
       await page.goto(path);
       await page.getByRole('heading', { level: 1 }).waitFor();
       await page.waitForLoadState('networkidle');
+      // Below what stands above every room of a commission.
+      if (ROOMS.has(name)) await page.locator('[data-rooms]').evaluate((rooms) => rooms.scrollIntoView());
       const limit = ALL_BYTES / (SCREENS.length * SIZES.length * SCHEMES.length);
       const picture = await lighten(await page.screenshot({ animations: 'disabled' }), limit);
       writeFileSync(join(FOLDER, `${name}-${size.width}-${colorScheme}.png`), picture);

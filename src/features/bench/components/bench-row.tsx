@@ -33,7 +33,7 @@ const ACT_WORDS: Readonly<Record<BenchItemView['kind'], string>> = {
   'finish-rework': 'Open the report',
   'verify-rework': 'Enter readings',
   consent: 'Look and decide',
-  'answer-offer': 'Other day',
+  'answer-offer': 'Offer another',
   'offer-day': 'Offer a day',
   'receive-parts': 'Receive',
   'start-leg': 'Open the plan',
