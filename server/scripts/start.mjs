@@ -31,7 +31,7 @@ await runCommand(async (scope) => {
   lock.setNote(`at ${address}, process ${process.pid}`);
   say(`\nFerrule is ready at ${address}\n`);
   if (signIns) say(`Demo sign-ins:\n${signIns}\n`);
-  say(`Data: ${folder}\nCtrl-C stops it.`);
+  say(`Data: ${folder}\nLetters that would be sent: ${folder}/mail\nCtrl-C stops it.`);
   const what = await Promise.race([
     once(server, 'exit').then(() => 'The application'),
     database.ended.then(() => 'PostgreSQL'),

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { isCountry } from '../units/countries.ts';
 
 export const uuid = z.uuid({ error: 'This is not an identifier' });
 
@@ -15,12 +16,10 @@ export const instant = z.iso.datetime();
 export const revision = z.int().min(1);
 
 /** A measured or estimated figure; its unit is in the name of the field. */
-export const figure = z.number({ error: 'Write a number' });
+export const figure = z.number({ error: 'Write a number such as 12 or 12.5' });
 
 /** An amount in the minor unit of its currency. */
-export const amountMinor = z
-  .int({ error: 'Write an amount, with no more decimals than its currency has' })
-  .min(0, 'Give 0 or more');
+export const amountMinor = z.int({ error: 'Write an amount such as 1250 or 1250.50' }).min(0, 'Give 0 or more');
 
 /** One line of typed text, trimmed. */
 export const line = (maxLength: number) =>
@@ -60,7 +59,7 @@ export const timeZone = z
   }, 'This is not a time zone name such as Europe/Berlin');
 
 /** ISO 3166-1 alpha-2. */
-export const country = z.string().regex(/^[A-Z]{2}$/, 'Give the two-letter country code (ISO 3166-1)');
+export const country = z.string().refine(isCountry, 'Choose a country (two-letter code, ISO 3166-1)');
 
 export const inCommission = z.object({ commissionId: uuid });
 

@@ -94,5 +94,5 @@ export function formatLength(valueMm: number, unit: LengthUnit): string {
 }
 
 /** A clearance or a removal in the reader's unit; nobody reads such small ones in fractions, so they are decimal inches there too. */
-export const formatDifference = (valueUm: number, unit: LengthUnit): string =>
-  unit === 'mm' ? formatMm(valueUm / 1000) : `${withSign(valueUm / 1000 / MM_PER_INCH, 4)} in`;
+export const formatDifference = (valueUm: number, unit: LengthUnit, digitsOfMm = 3): string =>
+  unit === 'mm' ? formatMm(valueUm / 1000, digitsOfMm) : `${withSign(valueUm / 1000 / MM_PER_INCH, digitsOfMm + 1)} in`;

@@ -14,6 +14,16 @@ import { connectionState, openRealtime } from '../lib/socket.ts';
 /** The menu brings its library with it, after the page itself is there. */
 const PersonMenu = lazy(() => import('./person-menu.tsx').then((module) => ({ default: module.PersonMenu })));
 
+/** The connection's library comes after the page itself is there. @returns takes it back */
+function whenIdle(act: () => void): () => void {
+  if (!('requestIdleCallback' in window)) {
+    const timer = setTimeout(act, 200);
+    return () => clearTimeout(timer);
+  }
+  const wish = requestIdleCallback(act, { timeout: 2000 });
+  return () => cancelIdleCallback(wish);
+}
+
 /** "Not connected" is said only when it lasts: a page that has just opened is still connecting. */
 const PATIENCE_MS = 4000;
 
@@ -85,7 +95,7 @@ function Frame() {
   const { data: me } = useSuspenseQuery(meQuery());
   const isClientOnly = me.shops.length === 0 && !me.isSteward;
   useArrival();
-  useEffect(() => void openRealtime(), []);
+  useEffect(() => whenIdle(() => void openRealtime()), []);
   return (
     <>
       <SkipLink target="page" />

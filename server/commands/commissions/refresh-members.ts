@@ -14,9 +14,9 @@ export async function refreshCommissionNames(manager: EntityManager, commissionI
           WHERE p."commission_id" = $1 AND p."left_at" IS NULL AND NOT 'guest' = ANY(p."roles")), '{}'),
        "lead_name" = COALESCE((SELECT s."name" FROM "party" p JOIN "shop" s ON s."id" = p."shop_id"
           WHERE p."commission_id" = $1 AND p."left_at" IS NULL AND 'lead' = ANY(p."roles")), ''),
-       "client_name" = (SELECT a."display_name" FROM "party" p JOIN "account" a ON a."id" = p."account_id"
-          WHERE p."commission_id" = $1 AND p."left_at" IS NULL AND 'client' = ANY(p."roles")
-          ORDER BY p."joined_at", p."id" LIMIT 1)
+       "client_name" = (SELECT string_agg(a."display_name", ' and ' ORDER BY p."joined_at", p."id")
+          FROM "party" p JOIN "account" a ON a."id" = p."account_id"
+          WHERE p."commission_id" = $1 AND p."left_at" IS NULL AND 'client' = ANY(p."roles"))
      WHERE "id" = $1`,
     [commissionId],
   );

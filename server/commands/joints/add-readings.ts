@@ -47,8 +47,8 @@ export const addReadings = (
     const partyIds = [joint.holePartyId, joint.shaftPartyId];
     const { partyId } = actingParty(ctx.actor, commissionId, partyIds);
     const [{ next } = { next: 1 }] = await uow.manager.query<{ next: number }[]>(
-      'SELECT COALESCE(max("set_number"), 0) + 1 AS next FROM "reading" WHERE "joint_id" = $1',
-      [jointId],
+      'SELECT COALESCE(max("set_number"), 0) + 1 AS next FROM "reading" WHERE "joint_id" = $1 AND "side" = $2',
+      [jointId, body.side],
     );
     await uow.manager.insert(
       Reading,
@@ -80,5 +80,7 @@ export const addReadings = (
       words: `Measured the ${body.side === 'hole' ? 'bore' : 'spigot'} of ${joint.name}, ${body.readings.length} ${body.readings.length === 1 ? 'reading' : 'readings'}`,
     });
     uow.announce('joint.changed', { commissionId, jointId }, { to: 'parties', commissionId, partyIds });
-    return (await loadReadings(uow.manager, jointId)).filter((reading) => reading.setNumber === next);
+    return (await loadReadings(uow.manager, jointId)).filter(
+      (reading) => reading.side === body.side && reading.setNumber === next,
+    );
   });

@@ -25,7 +25,7 @@ export function Component() {
   return (
     <Page>
       <CommissionHeading commissionId={commissionId} forClient={isClient} />
-      {works && (
+      {works && (pathname === base || pathname === `${base}/plan`) && (
         <div className="mb-5">
           <Sheet title="The way of the piece">
             <MakersBand commissionId={commissionId} title="The way of the piece from brief to delivery" />

@@ -6,6 +6,7 @@ import { Fold } from '../../components/ui/fold.tsx';
 import { Sheet } from '../../components/ui/sheet.tsx';
 import { RaiseForm } from '../../features/fit-reports/components/raise-form.tsx';
 import { FitSheet } from '../../features/joints/components/fit-sheet.tsx';
+import { ownSideOf } from '../../features/joints/own-side.ts';
 import { ReadingEntry } from '../../features/joints/components/reading-entry.tsx';
 import { ReadingsTable } from '../../features/joints/components/readings-table.tsx';
 import { EditJoint } from '../../features/plan/components/joint-form.tsx';
@@ -45,6 +46,7 @@ export function Component() {
                 sideNames={SIDE_WORDS[joint.kind]}
                 preferredUnit={me.preferredUnit}
                 reportId={joint.openReportId}
+                ownSide={ownSideOf(joint, mine)}
               />
             </Sheet>
           )}

@@ -8,6 +8,7 @@ import { NoteSheet } from '../../features/fit-reports/components/note-sheet.tsx'
 import { ReportActs } from '../../features/fit-reports/components/report-acts.tsx';
 import { ClientWords, ReportHead } from '../../features/fit-reports/components/report-head.tsx';
 import { FitSheet } from '../../features/joints/components/fit-sheet.tsx';
+import { ownSideOf } from '../../features/joints/own-side.ts';
 import { ReadingEntry } from '../../features/joints/components/reading-entry.tsx';
 import { fitOfJoint } from '../../features/joints/fit-of-joint.ts';
 import { PictureWall } from '../../features/pictures/components/picture-wall.tsx';
@@ -57,11 +58,11 @@ export function Component() {
             nameOf={nameOf}
             legTitle={legs.find((leg) => leg.id === report.heldLegId)?.title ?? null}
           />
-          <FitSheet joint={joint} readings={readings} unit={me.preferredUnit} />
           {notes.map((note) => (
             <NoteSheet key={note.id} note={note} nameOf={nameOf} sideNames={sideNames} unit={me.preferredUnit} />
           ))}
           <ReportActs commissionId={commissionId} detail={detail} />
+          <FitSheet joint={joint} readings={readings} unit={me.preferredUnit} />
           {mayAnswer && (
             <Sheet title={report.state === 'answered' ? 'Answer anew' : 'Answer with a rework note'}>
               <AnswerForm
@@ -84,6 +85,7 @@ export function Component() {
                 sideNames={sideNames}
                 preferredUnit={me.preferredUnit}
                 reportId={report.id}
+                ownSide={ownSideOf(joint, mine)}
               />
             </Sheet>
           )}

@@ -9,6 +9,8 @@ import type { Line } from '../support/report.ts';
 
 const GOAL_KB = 150;
 const ENTRY = 'index.html';
+const MENU = 'src/app/person-menu.tsx';
+/** Comes when the page is idle. */
 const SOCKET = 'node_modules/socket.io-client/build/esm/index.js';
 
 interface Chunk {
@@ -21,13 +23,13 @@ type Manifest = Readonly<Record<string, Chunk>>;
 /** Pages that people land on, by the modules their address loads beside the entry. */
 const LANDINGS = {
   'sign-in': ['src/app/routes/sign-in.tsx'],
-  'bench, home of those who work': ['src/app/routes/bench.tsx', SOCKET],
+  'bench, home of everyone': ['src/app/routes/bench.tsx', MENU],
   'commission, for makers and for the client': [
     'src/app/routes/commission-layout.tsx',
     'src/app/routes/room.tsx',
-    SOCKET,
+    MENU,
   ],
-  'thread, opened from a letter': ['src/app/routes/commission-layout.tsx', 'src/app/routes/thread.tsx', SOCKET],
+  'thread, opened from a letter': ['src/app/routes/commission-layout.tsx', 'src/app/routes/thread.tsx', MENU],
 } as const;
 
 /** A module and all that it imports at once; lazy modules are left out. */
@@ -71,6 +73,10 @@ export const firstLoad: Measurement = {
           verdict: verdictOf({ median: kB, min: kB, max: kB }, { atMost: GOAL_KB }),
         });
       }
+      lines.push({
+        what: 'JavaScript of the connection, once the page is idle',
+        figure: kilobytes(await gzipBytes([manifest[SOCKET]?.file ?? ''])),
+      });
       const css = new Set(Object.values(manifest).flatMap((chunk) => chunk.css ?? []));
       lines.push({ what: 'style sheets, all', figure: kilobytes(await gzipBytes(css)), detail: `${css.size} file` });
       const page = (await read(ENTRY)).toString();

@@ -18,6 +18,7 @@ const open = () =>
         sideNames={{ hole: 'bore', shaft: 'spigot' }}
         preferredUnit="mm"
         reportId={null}
+        ownSide={null}
       />
     </QueryClientProvider>,
   );
@@ -78,7 +79,7 @@ describe('readings being entered', () => {
     await typeInto(0, '31.91');
     await userEvent.type(screen.getByRole('textbox', { name: /Temperature/ }), '21 C');
     await userEvent.click(screen.getByRole('button', { name: 'Save 1 reading' }));
-    expect(await screen.findAllByText('Write a number')).not.toHaveLength(0);
+    expect(await screen.findAllByText('Write a number such as 12 or 12.5')).not.toHaveLength(0);
     expect(screen.getByRole('textbox', { name: /Temperature/ })).toHaveFocus();
     expect(sent).toHaveLength(0);
   });

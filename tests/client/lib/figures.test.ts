@@ -22,7 +22,9 @@ describe('a typed figure', () => {
 
   it('that is none is refused by the contract with the name of its field', () => {
     const refused = createJoint.body.safeParse({ nominalMm: figureFrom('abc') });
-    expect(refused.error?.issues.find((issue) => issue.path[0] === 'nominalMm')?.message).toBe('Write a number');
+    expect(refused.error?.issues.find((issue) => issue.path[0] === 'nominalMm')?.message).toBe(
+      'Write a number such as 12 or 12.5',
+    );
   });
 });
 

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { unit } from 'mathjs';
 import { describe, expect, it } from 'vitest';
 import {
+  formatDifference,
   formatLength,
   formatMm,
   formatUm,
@@ -103,5 +104,21 @@ describe('shown lengths', () => {
         expect(Math.abs(nearestFraction(mm).errorUm)).toBeLessThanOrEqual((25_400 / 128) * 1.000001);
       }),
     );
+  });
+});
+
+describe('a small difference', () => {
+  it.each([
+    [97, 'mm', '0.097 mm'],
+    [-43, 'mm', '−0.043 mm'],
+    // 0.001 in is 25.4 µm exactly.
+    [25.4, 'inch', '0.0010 in'],
+    [127, 'inch-fraction', '0.0050 in'],
+  ] as const)('of %d µm reads in %s as %s', (valueUm, unit, words) =>
+    expect(formatDifference(valueUm, unit)).toBe(words),
+  );
+
+  it('per side keeps the half micrometre, so that twice of it is the whole', () => {
+    expect(formatDifference(48.5, 'mm', 4)).toBe('0.0485 mm');
   });
 });

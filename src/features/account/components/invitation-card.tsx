@@ -4,6 +4,7 @@ import { acceptInvitation, previewInvitation } from '../../../../shared/contract
 import type { RouteOutput } from '../../../../shared/contracts/route.ts';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
+import { CountrySelect } from '../../../components/ui/country-select.tsx';
 import { Field } from '../../../components/ui/field.tsx';
 import { Select } from '../../../components/ui/select.tsx';
 import { Sheet } from '../../../components/ui/sheet.tsx';
@@ -44,11 +45,7 @@ function Accept({
             ...(signedIn
               ? {}
               : { newAccount: { displayName, password, timeZone: Intl.DateTimeFormat().resolvedOptions().timeZone } }),
-            ...(preview.needsShop
-              ? makesShop
-                ? { newShop: { name: shopName, country: country.toUpperCase() } }
-                : { shopId }
-              : {}),
+            ...(preview.needsShop ? (makesShop ? { newShop: { name: shopName, country } } : { shopId }) : {}),
           },
         });
       }}
@@ -106,11 +103,10 @@ function Accept({
               onChange={(event) => setShopName(event.target.value)}
             />
           </Field>
-          <Field label="Country" hint="Two letters, for instance DE">
-            <TextInput
+          <Field label="Country" error={errorAt('/body/newShop/country')}>
+            <CountrySelect
               value={country}
               required
-              maxLength={2}
               autoComplete="country"
               onChange={(event) => setCountry(event.target.value)}
             />

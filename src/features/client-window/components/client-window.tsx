@@ -43,6 +43,7 @@ export function ClientWindow({ commissionId, band, thread, pictures }: ClientWin
       </Sheet>
       <Sheet title="The way so far">{band}</Sheet>
       <Sheet title="Where it is">
+        {standing.whereEachPartIs.length === 0 && <p className="text-lead-grey">There is no part of it yet.</p>}
         <ul className="grid gap-1">
           {standing.whereEachPartIs.map((part) => (
             <li key={part.partId}>{part.words}</li>
@@ -54,9 +55,7 @@ export function ClientWindow({ commissionId, band, thread, pictures }: ClientWin
       {thread}
       <Sheet title="Papers">
         {commission.brief && <p className="max-w-words whitespace-pre-line">{commission.brief}</p>}
-        <p className="pt-3 text-note text-lead-grey">
-          The brief, as agreed. Last changed {shortInstant(commission.updatedAt)}.
-        </p>
+        <p className="pt-3 text-note text-lead-grey">The brief. Last changed {shortInstant(commission.updatedAt)}.</p>
         {consents
           .filter((consent) => consent.state !== 'asked')
           .map((consent) => (

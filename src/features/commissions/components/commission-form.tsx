@@ -68,7 +68,7 @@ function BriefFields({ values, set, errorAt }: BriefFieldsProps) {
         <Field label="Date wanted" optional error={errorAt('dateWanted')}>
           <DateInput value={values.dateWanted} onChange={(event) => set('dateWanted', event.target.value)} />
         </Field>
-        <Field label="Budget" optional hint="Seen by you and the client alone" error={errorAt('budgetMinor')}>
+        <Field label="Budget, for you and the client" optional error={errorAt('budgetMinor')}>
           <TextInput
             inputMode="decimal"
             value={values.budget}

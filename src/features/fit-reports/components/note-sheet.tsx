@@ -50,7 +50,7 @@ export function NoteSheet({
           label={`Off the ${sideNames[note.cutSide]}, on diameter`}
           value={formatDifference(note.removeOnDiameterUm, unit)}
         />
-        <MeasureRow label="per side" value={formatDifference(note.removeOnDiameterUm / 2, unit)} />
+        <MeasureRow label="per side" value={formatDifference(note.removeOnDiameterUm / 2, unit, 4)} />
         {note.overLengthMm !== null && <MeasureRow label="over" value={formatLength(note.overLengthMm, unit)} />}
         <MeasureRow label="Shows when closed" value={note.shows ? note.whereItShows : 'no'} />
         <MeasureRow

@@ -70,7 +70,7 @@ export function FitSheet({ joint, readings, unit }: FitSheetProps) {
               label={`Take off the ${names.shaft}, on diameter`}
               value={inUnit(removal.onDiameterUm)}
             />
-            <MeasureRow label="per side" value={inUnit(removal.perSideUm)} />
+            <MeasureRow label="per side" value={formatDifference(removal.perSideUm, unit, 4)} />
             <MeasureRow
               label="least and most that reach the range"
               value={`${inUnit(removal.leastOnDiameterUm)} – ${inUnit(removal.mostOnDiameterUm)}`}

@@ -20,6 +20,8 @@ export interface ReadingEntryProps {
   sideNames: { hole: string; shaft: string };
   preferredUnit: LengthUnit;
   reportId: string | null;
+  /** The one side that the reader's own shop answers for; null where it is both or neither. */
+  ownSide: JointSide | null;
   onDone?: () => void;
 }
 
@@ -33,6 +35,12 @@ function troubleWith(text: string, unit: LengthUnit, nominalMm: number): string 
   return looksLikeUnitMixUp(read.valueMm, nominalMm)
     ? `${formatMm(read.valueMm)} is far from ${formatMm(nominalMm)}; check the unit`
     : undefined;
+}
+
+/** What a value in inches is in millimetres, so that a slip of the unit is seen at once. */
+function readAs(text: string, unit: LengthUnit): string | undefined {
+  const read = parseLength(text, unit);
+  return read.ok && read.unit !== 'mm' ? `= ${formatMm(read.valueMm)}` : undefined;
 }
 
 const filledOf = (texts: readonly string[]): string[] => texts.map((text) => text.trim()).filter((text) => text !== '');
@@ -61,13 +69,14 @@ export function ReadingEntry({
   sideNames,
   preferredUnit,
   reportId,
+  ownSide,
   onDone,
 }: ReadingEntryProps) {
   const form = useContractForm<typeof addReadings, ReadingValues>(addReadings, {
     name: `readings-${jointId}`,
     initial: {
-      // Not chosen for the reader: readings stay with the side they were saved to.
-      side: '',
+      // Readings stay with the side they were saved to, so nothing but the reader's own side is taken for granted.
+      side: ownSide ?? '',
       unit: preferredUnit,
       resolution: '10',
       gauge: '',
@@ -145,7 +154,7 @@ export function ReadingEntry({
         {texts.map((text, index) => (
           // Fields have no identity but their place: readings are a column of figures.
           <li key={index}>
-            <Field label={`Reading ${index + 1}`} error={troubleWith(text, unit, nominalMm)}>
+            <Field label={`Reading ${index + 1}`} hint={readAs(text, unit)} error={troubleWith(text, unit, nominalMm)}>
               <LengthInput
                 value={text}
                 unit={unit === 'mm' ? 'mm' : 'in'}

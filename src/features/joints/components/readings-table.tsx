@@ -6,6 +6,10 @@ import { Sheet } from '../../../components/ui/sheet.tsx';
 import { shortInstant } from '../../../lib/today.ts';
 import { SIDE_WORDS } from '../../../lib/words.ts';
 
+/** A set stays together in the order in which it was taken. */
+const newestSetsFirst = (readings: readonly ReadingView[]): ReadingView[] =>
+  [...readings].sort((one, other) => other.takenAt.localeCompare(one.takenAt) || other.setNumber - one.setNumber);
+
 /** Every reading as it was taken, with what was typed. */
 export function ReadingsTable({
   joint,
@@ -50,7 +54,7 @@ export function ReadingsTable({
       <DataTable
         caption="Readings of this joint"
         columns={columns}
-        rows={[...readings].reverse()}
+        rows={newestSetsFirst(readings)}
         rowKey={(row) => row.id}
         empty={
           <EmptyState title="Nothing measured yet">

@@ -10,6 +10,7 @@ import { Button } from '../../../components/ui/button.tsx';
 import { Checkbox } from '../../../components/ui/checkbox.tsx';
 import { DateInput } from '../../../components/ui/date-input.tsx';
 import { Field } from '../../../components/ui/field.tsx';
+import { Notice } from '../../../components/ui/notice.tsx';
 import { Select } from '../../../components/ui/select.tsx';
 import { Sheet } from '../../../components/ui/sheet.tsx';
 import { TextInput } from '../../../components/ui/text-input.tsx';
@@ -49,6 +50,8 @@ function Invite({ commissionId, today }: { commissionId: string; today: string }
     stale: () => [keys.parties.list(commissionId)],
   });
   const { values, set } = form;
+  const { data } = useSuspenseQuery(commissionQueries.parties(commissionId));
+  const clients = data.parties.filter((party) => party.roles.includes('client'));
   const toggle = (list: readonly string[], item: string, on: boolean): string[] =>
     on ? [...list, item] : list.filter((one) => one !== item);
   return (
@@ -76,6 +79,12 @@ function Invite({ commissionId, today }: { commissionId: string; today: string }
           ))}
           {form.errorAt('roles') && <p className="text-note text-oxide">{form.errorAt('roles')}</p>}
         </fieldset>
+      )}
+      {values.kind === 'client' && clients.length > 0 && (
+        <Notice tone="brass">
+          There is a client already: {clients.map((party) => party.displayName).join(' and ')}. Another one sees and
+          decides as they do.
+        </Notice>
       )}
       {values.kind === 'guest' && (
         <>

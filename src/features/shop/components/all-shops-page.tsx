@@ -4,6 +4,7 @@ import { FormFrame } from '../../../components/form-frame.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
 import { DataTable, type Column } from '../../../components/ui/data-table.tsx';
+import { CountrySelect } from '../../../components/ui/country-select.tsx';
 import { Field } from '../../../components/ui/field.tsx';
 import { Page, PageHeading, TwoColumns } from '../../../components/ui/page.tsx';
 import { Sheet } from '../../../components/ui/sheet.tsx';
@@ -53,12 +54,8 @@ export function AllShopsPage() {
               <Field label="Craft" error={errorAt('craft')}>
                 <TextInput value={values.craft} onChange={(event) => set('craft', event.target.value)} />
               </Field>
-              <Field label="Country" hint="Two letters" error={errorAt('country')}>
-                <TextInput
-                  value={values.country}
-                  maxLength={2}
-                  onChange={(event) => set('country', event.target.value.toUpperCase())}
-                />
+              <Field label="Country" error={errorAt('country')}>
+                <CountrySelect value={values.country} onChange={(event) => set('country', event.target.value)} />
               </Field>
               <Field label="Owner's e-mail" error={errorAt('ownerEmail')}>
                 <TextInput

@@ -6,6 +6,7 @@ import { EditFormFoot } from '../../../components/edit-form-foot.tsx';
 import { FormFrame } from '../../../components/form-frame.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { Button } from '../../../components/ui/button.tsx';
+import { CountrySelect } from '../../../components/ui/country-select.tsx';
 import { Field } from '../../../components/ui/field.tsx';
 import { Page, PageHeading, TwoColumns } from '../../../components/ui/page.tsx';
 import { Select } from '../../../components/ui/select.tsx';
@@ -46,12 +47,8 @@ function ShopForm({ shop }: { shop: ShopView }) {
         <TextInput value={values.craft} maxLength={80} onChange={(event) => set('craft', event.target.value)} />
       </Field>
       <div className="grid gap-4 sm:grid-cols-3">
-        <Field label="Country" hint="Two letters" error={errorAt('country')}>
-          <TextInput
-            value={values.country}
-            maxLength={2}
-            onChange={(event) => set('country', event.target.value.toUpperCase())}
-          />
+        <Field label="Country" error={errorAt('country')}>
+          <CountrySelect value={values.country} onChange={(event) => set('country', event.target.value)} />
         </Field>
         <Field label="Time zone" error={errorAt('timeZone')}>
           <TextInput value={values.timeZone} onChange={(event) => set('timeZone', event.target.value)} />
