@@ -98,7 +98,7 @@ function allowMembership(allow: Can, membership: Membership): void {
   // A guest's key is kept out of `memberKeys`, since a guest's sight ends by date and not by an act.
   allow('read', 'Commission', [...COMMISSION_FIELDS.heading], { id: commissionId });
   if (membership.shopRole === 'bookkeeper') {
-    allow('read', 'Party', here);
+    allow('read', ['Party', 'Standing'] as never, here);
     allow('read', 'Leg', [...LEG_FIELDS.plan], here);
     return;
   }

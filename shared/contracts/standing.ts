@@ -137,7 +137,7 @@ export const getBench = defineRoute({
         messages: z.int(),
       }),
     ),
-    /** Open commissions in which the reader is the client. */
+    /** Open commissions of which the reader is the client, or at which they look on as a guest. */
     yourPieces: z.array(
       z.object({
         commissionId: uuid,

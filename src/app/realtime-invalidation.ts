@@ -92,6 +92,10 @@ export function followRealtime(queryClient: QueryClient): void {
     onRealtime(name, (event) => add(INVALIDATIONS[name](event)));
   };
   for (const name of Object.keys(REALTIME_EVENTS) as RealtimeName[]) follow(name);
+  // Whoever lost sight must not go on reading what was fetched while they had it.
+  onRealtime('membership.changed', ({ commissionId }) => {
+    void queryClient.resetQueries({ queryKey: keys.commission(commissionId) });
+  });
   // Events are sent at most once, and none comes before the connection stands: at each connect, the first one too, what
   // the page shows is asked for again. Threads ask by sequence.
   onConnected(() => {

@@ -37,6 +37,7 @@ const keepFocus = (): void =>
  */
 export function useAct<T extends AnyRoute>(route: T, options: ActOptions<T> = {}): Act<T> {
   const queryClient = useQueryClient();
+  const running = useRef(false);
   const key = useRef<{ body: string; value: string } | null>(null);
   const mutation = useMutation<RouteOutput<T>, Error, RouteInput<T>>({
     mutationFn: (input) => {
@@ -45,6 +46,7 @@ export function useAct<T extends AnyRoute>(route: T, options: ActOptions<T> = {}
       if (key.current?.body !== body) key.current = { body, value: crypto.randomUUID() };
       return api(route, input, { idempotencyKey: key.current.value });
     },
+    onSettled: () => void (running.current = false),
     onSuccess: async (output) => {
       key.current = null;
       await Promise.all((options.stale?.(output) ?? []).map((queryKey) => queryClient.invalidateQueries({ queryKey })));
@@ -54,7 +56,12 @@ export function useAct<T extends AnyRoute>(route: T, options: ActOptions<T> = {}
     },
   });
   return {
-    run: (input) => mutation.mutate(input),
+    run: (input) => {
+      // A second press can come before the first one is shown to be on its way.
+      if (running.current) return;
+      running.current = true;
+      mutation.mutate(input);
+    },
     pending: mutation.isPending,
     problem: problemFrom(mutation.error),
     forget: mutation.reset,

@@ -19,12 +19,14 @@ export function useSight(commissionId: string): Sight {
   const { data: me } = useSuspenseQuery(meQuery());
   const { data: commission } = useSuspenseQuery(commissionQueries.detail(commissionId));
   const { memberships } = commission;
-  const roles = new Set(memberships.flatMap((membership) => membership.roles));
+  // Who keeps a shop's books has no part in its work.
+  const working = memberships.filter((membership) => membership.shopRole !== 'bookkeeper');
+  const roles = new Set(working.flatMap((membership) => membership.roles));
   return {
     ability: abilityFor({ accountId: me.id, isSteward: me.isSteward, shops: me.shops, memberships }),
     memberships,
     roles,
-    mine: new Set(memberships.map((membership) => membership.partyId)),
+    mine: new Set(working.map((membership) => membership.partyId)),
     isClient: roles.has('client') && roles.size === 1,
   };
 }

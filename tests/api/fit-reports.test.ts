@@ -161,6 +161,21 @@ describe('a fit report', () => {
     expect((await bench.lead.client.call(legs.moveLeg, finish)).state).toBe('finished');
   });
 
+  it('takes no answer that cuts past what is hidden and says that nothing shows', async () => {
+    const detail = await raise();
+    const [joint] = await bench.lead.client.call(joints.listJoints, { params: bench.params });
+    await bench.lead.client.call(joints.updateJoint, {
+      params: { ...bench.params, jointId: bench.jointId },
+      body: { revision: joint?.revision ?? 0, engagementMm: 10, hiddenLengthMm: 8 },
+    });
+    const params = { ...bench.params, reportId: detail.report.id };
+    const body = note(detail.report.revision, { overLengthMm: 12 });
+    const refused = await bench.maker.client.refused(contracts.answerFitReport, { params, body });
+    expect(refused.errors?.map((error) => error.pointer)).toEqual(['/body/overLengthMm']);
+    const told = await answer(detail, { overLengthMm: 12, shows: true, whereItShows: 'Below the shoulder' });
+    expect(told.report.state).toBe('answered');
+  });
+
   it('can be ended by the lead during the rework, where the other side is gone, and frees its leg', async () => {
     let detail = await agree(await answer(await raise()));
     const params = { ...bench.params, reportId: detail.report.id };

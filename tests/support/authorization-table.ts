@@ -139,7 +139,7 @@ export const OUTCOMES: Readonly<Record<string, OutcomeRows>> = {
   // Whoever sent it may take it back: here the owner of each shop.
   removeFile: record('-NN0YN0000000', '-NN000Y000000', '-0000000000N0'),
 
-  getStanding: commission('-YYNYYYYY0000'),
+  getStanding: ALL_HERE,
   getBench: EVERY_PERSON,
   markBenchSeen: EVERY_PERSON,
   listMoved: ALL_HERE,

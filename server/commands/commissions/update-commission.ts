@@ -32,6 +32,7 @@ export const updateCommission = (
       if (ours === 0)
         throw new InputInvalid([{ pointer: '/body/coverFileId', message: 'Choose a picture of this commission' }]);
     }
+    const moves = changes.state !== undefined && changes.state !== row.state;
     Object.assign(row, given(changes), { revision: row.revision + 1, updatedAt: ctx.now });
     await uow.manager.save(row);
     uow.record({
@@ -39,8 +40,8 @@ export const updateCommission = (
       accountId: ctx.actor.accountId,
       subject: 'commission',
       subjectId: row.id,
-      words: changes.state ? `Set the commission to ${changes.state.replace('-', ' ')}` : 'Changed the commission',
-      clientMayRead: changes.state !== undefined,
+      words: moves ? `Set the commission to ${row.state.replace('-', ' ')}` : 'Changed the commission',
+      clientMayRead: moves,
     });
     uow.announce('commission.changed', { commissionId: row.id }, { to: 'everyone', commissionId: row.id });
     uow.announce('standing.changed', { commissionId: row.id }, { to: 'everyone', commissionId: row.id });

@@ -33,9 +33,14 @@ async function checksumOf(filePath: string): Promise<string> {
   return hash.digest('hex');
 }
 
+/** What is shown as a picture of the piece has to be one, or a video; a brief may be a paper too. */
+const PICTURED = new Set(['before', 'after', 'cover', 'condition']);
+
 /** Stores what was received under made-up names: photographs in sizes, videos without their place, the rest as it is. */
-async function store(storage: ObjectStorage, file: ReceivedFile): Promise<StoredBytes> {
+async function store(storage: ObjectStorage, file: ReceivedFile, purpose: string): Promise<StoredBytes> {
   const { mediaType, kind } = await detectMediaType(file.path);
+  if (PICTURED.has(purpose) && !/^(?:image|video)\//.test(mediaType))
+    throw new AppError('file-refused', 'Only pictures and videos go here, and this file is neither.');
   if (kind === 'image') {
     if (file.byteSize > FILE_LIMITS.imageBytes)
       throw new FileRefusedError(
@@ -108,7 +113,7 @@ async function keep(
     return presentFile(earlier);
   }
   const { storage } = ctx.services;
-  const stored = await store(storage, file);
+  const stored = await store(storage, file, purpose);
   try {
     await inTransaction(ctx, async (uow) => {
       await uow.manager.insert(StoredFile, {

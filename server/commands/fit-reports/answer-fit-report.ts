@@ -1,6 +1,8 @@
 import type { answerFitReport as contract, FitReportDetail } from '../../../shared/contracts/fit-reports.ts';
 import type { ParsedInput } from '../../../shared/contracts/route.ts';
+import { Joint } from '../../entities/joint.ts';
 import { ReworkNote } from '../../entities/rework-note.ts';
+import { InputInvalid } from '../../errors.ts';
 import type { RequestContext } from '../../http/context.ts';
 import { requireParties } from '../../queries/parties/load-party.ts';
 import { reportAct } from './report-act.ts';
@@ -17,6 +19,14 @@ export const answerFitReport = (
       const { revision: _revision, ...fields } = body;
       if (body.costBorneByPartyId)
         await requireParties(uow.manager, params.commissionId, [['/body/costBorneByPartyId', body.costBorneByPartyId]]);
+      const joint = await uow.manager.findOneByOrFail(Joint, { id: report.jointId });
+      if (joint.hiddenLengthMm !== null && (body.overLengthMm ?? 0) > joint.hiddenLengthMm && !body.shows)
+        throw new InputInvalid([
+          {
+            pointer: '/body/overLengthMm',
+            message: `${joint.hiddenLengthMm} mm of this joint are hidden, so a cut over ${body.overLengthMm} mm shows: say where, and the client is asked`,
+          },
+        ]);
       if (earlier?.state === 'offered')
         await uow.manager.update(ReworkNote, { id: earlier.id }, { state: 'other-limits-asked' });
       await uow.manager.insert(ReworkNote, {

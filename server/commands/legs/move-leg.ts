@@ -24,7 +24,10 @@ export const moveLeg = (ctx: RequestContext, { params, body }: ParsedInput<typeo
   inTransaction(ctx, async (uow) => {
     const { commissionId, legId } = params;
     // Locks the commission's plan and not the leg alone: whether a leg may start depends on other legs.
-    await uow.manager.findOne(Commission, { where: { id: commissionId }, lock: { mode: 'pessimistic_write' } });
+    const commission = await uow.manager.findOne(Commission, {
+      where: { id: commissionId },
+      lock: { mode: 'pessimistic_write' },
+    });
     const legs = await loadAllLegs(uow.manager, commissionId);
     const leg = legs.find((one) => one.id === legId) ?? null;
     authorize(ctx.ability, body.state === 'dropped' ? 'drop' : 'move', 'Leg', leg);
@@ -53,6 +56,11 @@ export const moveLeg = (ctx: RequestContext, { params, body }: ParsedInput<typeo
       },
     );
     announceLegs(uow, ctx, commissionId, leg, `${WORDS[body.state]}: ${leg.title}`, true);
+    if (body.state === 'under-way' && commission?.state === 'in-brief') {
+      Object.assign(commission, { state: 'at-work', revision: commission.revision + 1, updatedAt: ctx.now });
+      await uow.manager.save(commission);
+      uow.announce('commission.changed', { commissionId }, { to: 'everyone', commissionId });
+    }
     const saved = await loadLeg(uow.manager, commissionId, legId);
     if (!saved) throw new NotFound();
     return saved;

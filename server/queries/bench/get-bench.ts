@@ -1,5 +1,8 @@
+import type { EntityManager } from 'typeorm';
+import type { Membership } from '../../../shared/abilities/actor.ts';
 import type { BenchItemView, getBench as contract } from '../../../shared/contracts/standing.ts';
 import type { RouteOutput } from '../../../shared/contracts/route.ts';
+import type { CommissionState } from '../../../shared/contracts/vocabulary.ts';
 import { showCode } from '../../../shared/engines/codes/crockford.ts';
 import type { RequestContext } from '../../http/context.ts';
 import { loadActor } from '../../policies/load-actor.ts';
@@ -53,7 +56,11 @@ export async function getBench(ctx: RequestContext): Promise<RouteOutput<typeof 
   });
   const unread = await unreadThreads(ctx, commissionIds, [...mine]);
   const titles = new Map(facts.commissions.map((piece) => [piece.id, piece.title]));
-  const asClient = new Set(working.filter((one) => one.roles.includes('client')).map((one) => one.commissionId));
+  const memberships = (known?.actor.memberships ?? []).filter((one) => one.shopRole !== 'bookkeeper');
+  const pieces = await loadPieces(
+    ctx.manager,
+    memberships.filter((one) => one.roles.includes('client') || one.roles.includes('guest')),
+  );
   return {
     waitsOnYou: [...onMe, ...mentions].sort(byUrgency),
     youWaitOn: onOthers.sort(byUrgency),
@@ -71,16 +78,8 @@ export async function getBench(ctx: RequestContext): Promise<RouteOutput<typeof 
       title: row.title,
       messages: row.messages,
     })),
-    yourPieces: facts.commissions
-      .filter((piece) => asClient.has(piece.id))
-      .map((piece) => ({
-        commissionId: piece.id,
-        title: piece.title,
-        code: showCode(piece.code),
-        leadName: piece.leadName,
-        state: piece.state,
-      })),
-    roles: [...new Set(working.flatMap((one) => one.roles))],
+    yourPieces: pieces,
+    roles: [...new Set(memberships.flatMap((one) => one.roles))],
   };
 }
 
@@ -115,4 +114,25 @@ async function unreadThreads(
     [commissionIds, partyIds, ctx.actor.accountId, UNREAD_SHOWN],
   );
   return { count: rows[0]?.threads ?? 0, rows };
+}
+
+/** The pieces that someone is the client of, or looks on at. */
+async function loadPieces(
+  manager: EntityManager,
+  memberships: readonly Membership[],
+): Promise<RouteOutput<typeof contract>['yourPieces']> {
+  const rows = await manager.query<
+    { id: string; title: string; code: string; lead_name: string; state: CommissionState }[]
+  >(
+    `SELECT "id", "title", "code", "lead_name", "state" FROM "commission" WHERE "id" = ANY($1) AND "state" <> 'ended'
+     ORDER BY "updated_at" DESC, "id"`,
+    [memberships.map((one) => one.commissionId)],
+  );
+  return rows.map((row) => ({
+    commissionId: row.id,
+    title: row.title,
+    code: showCode(row.code),
+    leadName: row.lead_name,
+    state: row.state,
+  }));
 }

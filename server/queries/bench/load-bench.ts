@@ -71,7 +71,7 @@ export async function loadBenchFacts(
   const ask = <T>(sql: string, params: unknown[] = [commissionIds]): Promise<T[]> => manager.query<T[]>(sql, params);
   const [commissions, parties, legs, reports, handoffs, mentions] = await Promise.all([
     ask<BenchFacts['commissions'][number]>(
-      `SELECT "id", "title", "code", "cover_file_id" AS "coverFileId", "state", "lead_name" AS "leadName" FROM "commission" WHERE "id" = ANY($1) AND "state" <> 'ended'`,
+      `SELECT "id", "title", "code", "cover_file_id" AS "coverFileId", "state" FROM "commission" WHERE "id" = ANY($1) AND "state" <> 'ended'`,
     ),
     ask<BenchFacts['parties'][number]>(
       `SELECT p."id", p."commission_id" AS "commissionId", p."roles", p."left_at" IS NOT NULL AS left, COALESCE(s."name", a."display_name") AS name FROM "party" p

@@ -38,7 +38,7 @@ export function Component() {
         className="mb-5 flex flex-wrap gap-x-5 border-b border-hairline"
       >
         <NavLink end to={base} className={roomLink}>
-          {isClient ? 'Your window' : isLead ? "Lead's desk" : 'Bench'}
+          {isClient ? 'Your window' : isLead ? "Lead's desk" : works ? 'Bench' : 'Where it stands'}
         </NavLink>
         {works && (
           <NavLink to={`${base}/plan`} className={roomLink}>
@@ -50,9 +50,11 @@ export function Component() {
             Threads
           </NavLink>
         )}
-        <NavLink to={`${base}/pictures`} className={roomLink}>
-          Pictures
-        </NavLink>
+        {mayDo(ability, 'read', 'Pictures', { commissionId }) && (
+          <NavLink to={`${base}/pictures`} className={roomLink}>
+            Pictures
+          </NavLink>
+        )}
         {(works || isClient) && (
           <NavLink to={`${base}/parties`} className={roomLink}>
             Who takes part

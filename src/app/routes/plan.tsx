@@ -11,6 +11,7 @@ import { AddLeg } from '../../features/plan/components/leg-form.tsx';
 import { AddPart, EditPart } from '../../features/plan/components/part-form.tsx';
 import { useSight } from '../../hooks/use-membership.ts';
 import { usePartyBook } from '../../hooks/use-party-names.ts';
+import { ownProblem } from '../../lib/api.ts';
 import { commissionQueries } from '../../lib/queries/commissions.ts';
 import { todayIn } from '../../lib/today.ts';
 import { usePathId } from '../use-path-id.ts';
@@ -18,6 +19,8 @@ import { usePathId } from '../use-path-id.ts';
 export function Component() {
   const commissionId = usePathId('commissionId');
   const { ability, mine } = useSight(commissionId);
+  const works = mayDo(ability, 'read', 'Leg', { commissionId, partyId: '' });
+  if (!works) throw ownProblem('not-permitted', 'The plan is for the shops that work on the piece.');
   const { parties } = usePartyBook(commissionId);
   const { data: parts } = useSuspenseQuery(commissionQueries.parts(commissionId));
   const { data: legs } = useSuspenseQuery(commissionQueries.legs(commissionId));

@@ -12,7 +12,10 @@ import {
 import { StandingOnly } from '../../features/commissions/components/standing-only.tsx';
 import { PictureWall } from '../../features/pictures/components/picture-wall.tsx';
 import { ThreadSheet } from '../../features/threads/components/thread-sheet.tsx';
+import { LegsSheet } from '../../features/plan/components/legs-sheet.tsx';
 import { useSight } from '../../hooks/use-membership.ts';
+import { usePartyBook } from '../../hooks/use-party-names.ts';
+import { commissionQueries } from '../../lib/queries/commissions.ts';
 import { threadQueries } from '../../lib/queries/threads.ts';
 import { todayIn } from '../../lib/today.ts';
 import { usePathId } from '../use-path-id.ts';
@@ -24,9 +27,21 @@ function CommonThread({ commissionId }: { commissionId: string }) {
   return common ? <ThreadSheet commissionId={commissionId} thread={common} /> : null;
 }
 
+/** For those who keep a shop's books: the way of the piece and its plan. */
+function BooksRoom({ commissionId }: { commissionId: string }) {
+  const { data: legs } = useSuspenseQuery(commissionQueries.legs(commissionId));
+  const { parties } = usePartyBook(commissionId);
+  return (
+    <div className="grid gap-5">
+      <StandingOnly commissionId={commissionId} />
+      <LegsSheet choices={{ commissionId, parties, parts: [], legs }} actsOf={() => null} />
+    </div>
+  );
+}
+
 export function Component() {
   const commissionId = usePathId('commissionId');
-  const { isClient, memberships, roles } = useSight(commissionId);
+  const { isClient, roles } = useSight(commissionId);
   const today = todayIn();
   if (isClient)
     return (
@@ -45,8 +60,8 @@ export function Component() {
         }
       />
     );
-  const looksOn = roles.has('guest') || memberships.every((membership) => membership.shopRole === 'bookkeeper');
-  if (looksOn) return <StandingOnly commissionId={commissionId} mayStand={roles.has('guest')} />;
+  if (roles.size === 0) return <BooksRoom commissionId={commissionId} />;
+  if (roles.has('guest')) return <StandingOnly commissionId={commissionId} />;
   return (
     <TwoColumns
       main={

@@ -210,6 +210,20 @@ describe('an act', () => {
     expect(other).not.toBe(next);
   });
 
+  it('is done once, however fast it is pressed twice', async () => {
+    const sent = fakeServer([[createShop, () => json(shop, 201)]]);
+    const { result } = renderHook(() => useAct(createShop), { wrapper: inClient(signedInAs('ines')) });
+    const input = { body: { name: 'Weir', craft: 'Blades', country: 'DE', ownerEmail: 'hana@weir.example' } };
+    act(() => {
+      result.current.run(input);
+      result.current.run(input);
+    });
+    await waitFor(() => expect(result.current.pending).toBe(false));
+    expect(sent).toHaveLength(1);
+    act(() => result.current.run(input));
+    await waitFor(() => expect(sent).toHaveLength(2));
+  });
+
   it('says so when something unforeseen stopped it', async () => {
     fakeServer([]);
     const { result } = openAct();

@@ -57,6 +57,16 @@ describe('what an event makes stale', () => {
     expect(stale).toContain(JSON.stringify(keys.commission(C)));
   });
 
+  it('lets go of what was fetched of a commission, when rights in it changed', () => {
+    const client = new QueryClient();
+    client.setQueryData(keys.joints.lists(C), ['secret']);
+    client.setQueryData(keys.joints.lists(OTHER), ['kept']);
+    followRealtime(client);
+    wire.events.get('membership.changed')?.({ commissionId: C });
+    expect(client.getQueryData(keys.joints.lists(C))).toBeUndefined();
+    expect(client.getQueryData(keys.joints.lists(OTHER))).toEqual(['kept']);
+  });
+
   it('includes what happened, for each act that leaves a line there', () => {
     const inCommission = { commissionId: C };
     const line = JSON.stringify(keys.history.list(C));

@@ -38,7 +38,6 @@ export function HowYouRead({ me }: { me: AccountView }) {
         <Field label="Name" error={errorAt('displayName')}>
           <TextInput
             value={values.displayName}
-            maxLength={80}
             autoComplete="name"
             onChange={(event) => set('displayName', event.target.value)}
           />

@@ -56,7 +56,6 @@ function Accept({
             <TextInput
               value={displayName}
               required
-              maxLength={80}
               autoComplete="name"
               onChange={(event) => setDisplayName(event.target.value)}
             />
@@ -98,7 +97,6 @@ function Accept({
             <TextInput
               value={shopName}
               required
-              maxLength={80}
               autoComplete="organization"
               onChange={(event) => setShopName(event.target.value)}
             />

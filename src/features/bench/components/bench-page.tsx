@@ -11,6 +11,7 @@ import { Stamp } from '../../../components/ui/stamp.tsx';
 import { useAct } from '../../../hooks/use-act.ts';
 import { keys } from '../../../lib/query-keys.ts';
 import { benchQuery } from '../../../lib/queries/bench.ts';
+import { meQuery } from '../../../lib/queries/me.ts';
 import { shortInstant } from '../../../lib/today.ts';
 import { COMMISSION_STATE_WORDS } from '../../../lib/words.ts';
 import { addressOfSubject } from '../subject-address.ts';
@@ -93,14 +94,28 @@ const handsWords = (count: number): string =>
 export function BenchPage({ today }: { today: string }) {
   const { data } = useSuspenseQuery(benchQuery());
   const seen = useAct(markBenchSeen, { stale: () => [keys.bench()], said: 'Marked as seen.' });
-  const isClientOnly = data.roles.length > 0 && data.roles.every((role) => role === 'client');
+  const { data: me } = useSuspenseQuery(meQuery());
+  const isClientOnly = data.roles.length > 0 && data.roles.every((role) => role === 'client' || role === 'guest');
+  const isStewardOnly = data.roles.length === 0 && me.isSteward;
+  const looksOnly = isClientOnly || isStewardOnly;
   return (
     <Page>
       <PageHeading title={isClientOnly ? 'My pieces' : 'My bench'} headline={handsWords(data.waitsOnYou.length)} />
       <TwoColumns
         main={
           <div className="grid gap-5">
-            {(data.waitsOnYou.length > 0 || !isClientOnly) && (
+            {isStewardOnly && (
+              <Sheet title="This installation">
+                <p>
+                  You open shops and see{' '}
+                  <Link to="/shops" className="underline">
+                    all of them
+                  </Link>
+                  ; what is inside their commissions is theirs.
+                </p>
+              </Sheet>
+            )}
+            {(data.waitsOnYou.length > 0 || !looksOnly) && (
               <Sheet title="Waits on you" note="What holds up most comes first">
                 {data.waitsOnYou.length === 0 ? (
                   <EmptyState title="Your hands are free">
@@ -116,7 +131,7 @@ export function BenchPage({ today }: { today: string }) {
               </Sheet>
             )}
             {data.yourPieces.length > 0 && <YourPieces pieces={data.yourPieces} />}
-            {!isClientOnly && (
+            {!looksOnly && (
               <Sheet title="You wait on">
                 {data.youWaitOn.length === 0 ? (
                   <EmptyState title="You wait on nobody">

@@ -49,7 +49,7 @@ export function ConsentCard({ commissionId, consent }: { commissionId: string; c
         <>
           {refusing && (
             <Field label="What you would rather have" optional>
-              <TextArea value={words} maxLength={2000} onChange={(event) => setWords(event.target.value)} />
+              <TextArea value={words} onChange={(event) => setWords(event.target.value)} />
             </Field>
           )}
           <div className="flex flex-wrap gap-2">

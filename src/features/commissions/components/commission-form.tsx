@@ -54,7 +54,7 @@ function BriefFields({ values, set, errorAt }: BriefFieldsProps) {
   return (
     <>
       <Field label="Name of the piece" required error={errorAt('title')}>
-        <TextInput value={values.title} maxLength={120} onChange={(event) => set('title', event.target.value)} />
+        <TextInput value={values.title} onChange={(event) => set('title', event.target.value)} />
       </Field>
       <Field
         label="Brief"
@@ -62,7 +62,7 @@ function BriefFields({ values, set, errorAt }: BriefFieldsProps) {
         optional
         error={errorAt('brief')}
       >
-        <TextArea value={values.brief} maxLength={8000} onChange={(event) => set('brief', event.target.value)} />
+        <TextArea value={values.brief} onChange={(event) => set('brief', event.target.value)} />
       </Field>
       <div className="grid gap-4 sm:grid-cols-3">
         <Field label="Date wanted" optional error={errorAt('dateWanted')}>

@@ -92,7 +92,7 @@ export function AnswerForm({
   return (
     <FormFrame form={form}>
       <Field label="What will be done" required error={errorAt('method')}>
-        <TextArea value={method} required maxLength={4000} onChange={(event) => set('method', event.target.value)} />
+        <TextArea value={method} required onChange={(event) => set('method', event.target.value)} />
       </Field>
       <div className="grid gap-4 sm:grid-cols-3">
         <Field label="Which part is cut">
@@ -113,7 +113,7 @@ export function AnswerForm({
         </Field>
       </div>
       <Field label="What could go wrong" optional>
-        <TextArea value={risk} maxLength={2000} onChange={(event) => set('risk', event.target.value)} />
+        <TextArea value={risk} onChange={(event) => set('risk', event.target.value)} />
       </Field>
       <Checkbox
         label="It will show when the joint is closed"
@@ -123,7 +123,7 @@ export function AnswerForm({
       />
       {shows && (
         <Field label="Where it will show, in words for the client" required error={errorAt('whereItShows')}>
-          <TextInput value={where} required maxLength={500} onChange={(event) => set('where', event.target.value)} />
+          <TextInput value={where} required onChange={(event) => set('where', event.target.value)} />
         </Field>
       )}
       <div className="grid gap-4 sm:grid-cols-3">

@@ -56,10 +56,10 @@ export function RaiseForm({ commissionId, jointId, legs, onRaised }: RaiseFormPr
       }}
     >
       <Field label="What is wrong, in a few words" hint="For instance: pommel will not draw">
-        <TextInput value={title} required maxLength={120} onChange={(event) => setTitle(event.target.value)} />
+        <TextInput value={title} required onChange={(event) => setTitle(event.target.value)} />
       </Field>
       <Field label="What you saw" optional>
-        <TextArea value={words} maxLength={4000} onChange={(event) => setWords(event.target.value)} />
+        <TextArea value={words} onChange={(event) => setWords(event.target.value)} />
       </Field>
       {open.length > 0 && (
         <Checkbox

@@ -67,7 +67,6 @@ function WordedAct<T extends WordedRoute>({
         <TextArea
           value={form.values.words}
           required={required}
-          maxLength={2000}
           onChange={(event) => form.set('words', event.target.value)}
         />
       </Field>

@@ -99,7 +99,7 @@ export function ClientWords({ commissionId, detail }: { commissionId: string; de
         }}
       >
         <Field label="In the client's words" hint="For instance: the end cap was too tight">
-          <TextInput value={words} required maxLength={200} onChange={(event) => setWords(event.target.value)} />
+          <TextInput value={words} required onChange={(event) => setWords(event.target.value)} />
         </Field>
         <div>
           <Button type="submit" variant="outline" busy={write.pending}>

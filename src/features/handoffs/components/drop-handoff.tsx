@@ -37,12 +37,7 @@ export function DropHandoff({ commissionId, handoff }: { commissionId: string; h
           required
           error={form.errorAt('words')}
         >
-          <TextArea
-            value={form.values.words}
-            required
-            maxLength={1000}
-            onChange={(event) => form.set('words', event.target.value)}
-          />
+          <TextArea value={form.values.words} required onChange={(event) => form.set('words', event.target.value)} />
         </Field>
         <div>
           <Button type="submit" variant="danger" busy={form.act.pending}>

@@ -71,7 +71,7 @@ function OfferDay({ commissionId, handoff, today, countering }: HandoffProps & {
         <DateInput value={onDay} min={today} required onChange={(event) => setOnDay(event.target.value)} />
       </Field>
       <Field label="A word with it" optional>
-        <TextInput value={words} maxLength={1000} onChange={(event) => setWords(event.target.value)} />
+        <TextInput value={words} onChange={(event) => setWords(event.target.value)} />
       </Field>
       <DayEffect commissionId={commissionId} handoffId={handoff.id} onDay={onDay} />
       <div>
@@ -126,7 +126,7 @@ function AnswerOffer({ commissionId, handoff, today }: HandoffProps) {
           }}
         >
           <Field label="Why this day does not work" required>
-            <TextInput value={reason} required maxLength={1000} onChange={(event) => setReason(event.target.value)} />
+            <TextInput value={reason} required onChange={(event) => setReason(event.target.value)} />
           </Field>
           <div>
             <Button type="submit" variant="outline" busy={decline.pending}>

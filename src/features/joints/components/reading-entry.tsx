@@ -173,7 +173,7 @@ export function ReadingEntry({
       </ol>
       <div className="grid gap-4 sm:grid-cols-3">
         <Field label="Gauge" optional error={errorAt('gauge')}>
-          <TextInput value={gauge} maxLength={60} onChange={(event) => set('gauge', event.target.value)} />
+          <TextInput value={gauge} onChange={(event) => set('gauge', event.target.value)} />
         </Field>
         <Field label="Temperature, °C" optional error={errorAt('temperatureC')}>
           <TextInput

@@ -65,7 +65,7 @@ function AddPictures({
           Take one now
         </FilePicker>
       </div>
-      <PendingFiles uploads={uploads} />
+      <PendingFiles uploads={{ ...uploads, files: uploads.files.filter((file) => file.state !== 'stored') }} />
     </div>
   );
 }

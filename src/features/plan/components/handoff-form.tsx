@@ -96,11 +96,7 @@ export function AddHandoff({ commissionId, parties, parts, legs, mine }: PlanCho
           />
         </Field>
         <Field label="How it travels" optional>
-          <TextInput
-            value={values.carriage}
-            maxLength={120}
-            onChange={(event) => set('carriage', event.target.value)}
-          />
+          <TextInput value={values.carriage} onChange={(event) => set('carriage', event.target.value)} />
         </Field>
       </div>
       <div>

@@ -160,7 +160,7 @@ function JointFields({ form, choices }: JointFieldsProps) {
   return (
     <>
       <Field label="Name" hint="For instance: pommel spigot in hilt bore" error={errorAt('name')}>
-        <TextInput value={values.name} maxLength={120} onChange={(event) => set('name', event.target.value)} />
+        <TextInput value={values.name} onChange={(event) => set('name', event.target.value)} />
       </Field>
       <Field label="Kind" error={errorAt('kind')}>
         <Select value={values.kind} onChange={(event) => set('kind', event.target.value)}>
@@ -170,7 +170,7 @@ function JointFields({ form, choices }: JointFieldsProps) {
       <SideFields form={form} choices={choices} />
       <FitFields form={form} />
       <Field label="What was agreed besides" optional error={errorAt('note')}>
-        <TextArea value={values.note} maxLength={2000} onChange={(event) => set('note', event.target.value)} />
+        <TextArea value={values.note} onChange={(event) => set('note', event.target.value)} />
       </Field>
     </>
   );

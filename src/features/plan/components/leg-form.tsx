@@ -56,7 +56,7 @@ function WorkFields({ form: { values, patch, errorAt }, choices: { parties, part
   return (
     <>
       <Field label="Work" hint="For instance: turn and hollow the hilt" error={errorAt('title')}>
-        <TextInput value={values.title} maxLength={80} onChange={(event) => patch({ title: event.target.value })} />
+        <TextInput value={values.title} onChange={(event) => patch({ title: event.target.value })} />
       </Field>
       <div className="grid gap-4 @md:grid-cols-3">
         <Field label="Kind" error={errorAt('kind')}>
@@ -228,7 +228,7 @@ export function EditLeg({
       <TimeFields form={form} />
       {isOwn && (
         <Field label="Own note" hint="Seen by your shop alone" optional error={errorAt('privateNote')}>
-          <TextArea value={values.note} maxLength={2000} onChange={(event) => set('note', event.target.value)} />
+          <TextArea value={values.note} onChange={(event) => set('note', event.target.value)} />
         </Field>
       )}
       <EditFormFoot form={form} save="Save this leg" />

@@ -36,7 +36,7 @@ function PartFields({
   return (
     <>
       <Field label="Name" error={errorAt('name')}>
-        <TextInput value={values.name} maxLength={80} onChange={(event) => set('name', event.target.value)} />
+        <TextInput value={values.name} onChange={(event) => set('name', event.target.value)} />
       </Field>
       <Field label="Kind" error={errorAt('kind')}>
         <Select value={values.kind} onChange={(event) => set('kind', event.target.value)}>

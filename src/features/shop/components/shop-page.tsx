@@ -41,10 +41,10 @@ function ShopForm({ shop }: { shop: ShopView }) {
   return (
     <FormFrame form={form}>
       <Field label="Name" error={errorAt('name')}>
-        <TextInput value={values.name} maxLength={80} onChange={(event) => set('name', event.target.value)} />
+        <TextInput value={values.name} onChange={(event) => set('name', event.target.value)} />
       </Field>
       <Field label="Craft" hint="In a few words, as clients read it" error={errorAt('craft')}>
-        <TextInput value={values.craft} maxLength={80} onChange={(event) => set('craft', event.target.value)} />
+        <TextInput value={values.craft} onChange={(event) => set('craft', event.target.value)} />
       </Field>
       <div className="grid gap-4 sm:grid-cols-3">
         <Field label="Country" error={errorAt('country')}>

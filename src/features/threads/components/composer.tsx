@@ -114,7 +114,6 @@ export function Composer({ commissionId, threadId, audience, readers, onTyped, o
         <TextArea
           ref={area}
           value={text}
-          maxLength={8000}
           onChange={(event) => {
             setText(event.target.value);
             onTyped();

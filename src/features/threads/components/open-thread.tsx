@@ -64,7 +64,7 @@ export function OpenThread({
       }}
     >
       <Field label="What it is about">
-        <TextInput value={title} required maxLength={120} onChange={(event) => setTitle(event.target.value)} />
+        <TextInput value={title} required onChange={(event) => setTitle(event.target.value)} />
       </Field>
       <Field label="Who reads it" hint="This cannot be changed later; open another thread for another circle">
         <Select value={audience} onChange={(event) => setAudience(event.target.value as Audience)}>
